@@ -12,7 +12,10 @@ export function localMidnight(day: string, zone: string): Date {
 
 /** The instant of a local wall time; a time skipped by a clock change moves on by the gap, a doubled one is the earlier. */
 export function localDateTime(day: string, time: string, zone: string): Date {
-  const wall = Temporal.PlainDate.from(day).toZonedDateTime({ timeZone: zone, plainTime: Temporal.PlainTime.from(time) });
+  const wall = Temporal.PlainDate.from(day).toZonedDateTime({
+    timeZone: zone,
+    plainTime: Temporal.PlainTime.from(time),
+  });
   return new Date(wall.epochMilliseconds);
 }
 
