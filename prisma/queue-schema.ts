@@ -1,0 +1,2 @@
+/** Schema of the queue's tables. */
+export const QUEUE_SCHEMA = 'pgboss';
