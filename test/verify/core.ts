@@ -1,0 +1,82 @@
+import { domainOf } from '../../src/core/domains/domain-of.ts';
+import { extremeBoundCycling, extremeBoundRunning } from '../../src/core/domains/extreme-bound.ts';
+import { clockMinutes } from '../../src/core/load/clock-minutes.ts';
+import { dailySum } from '../../src/core/load/daily-sum.ts';
+import { domainLoad } from '../../src/core/load/domain-load.ts';
+import { checkHeartRate, heartRateFraction } from '../../src/core/load/heart-rate-fraction.ts';
+import { heartRateLoadBanister } from '../../src/core/load/heart-rate-load-banister.ts';
+import {
+  edwardsZoneEdges,
+  edwardsZoneMinutes,
+  heartRateLoadEdwards,
+} from '../../src/core/load/heart-rate-load-edwards.ts';
+import { heartRateLoadThreePhase, phaseShares } from '../../src/core/load/heart-rate-load-three-phase.ts';
+import { monotonyPopulation, monotonySample, strain } from '../../src/core/load/monotony.ts';
+import { sessionRatingLoad } from '../../src/core/load/session-rating-load.ts';
+import { volumeLoad } from '../../src/core/load/volume-load.ts';
+import { acuteChronicCoupled } from '../../src/core/ratio/acute-chronic-coupled.ts';
+import { acuteChronicExponential } from '../../src/core/ratio/acute-chronic-exponential.ts';
+import { acuteChronicUncoupled } from '../../src/core/ratio/acute-chronic-uncoupled.ts';
+import { correlation } from '../../src/core/ratio/correlation.ts';
+import { coupledFromUncoupled, uncoupledFromCoupled } from '../../src/core/ratio/coupled-from-uncoupled.ts';
+import { impulseComponentExclusive, impulseComponentInclusive } from '../../src/core/response/impulse-component.ts';
+import { impulseInfluence } from '../../src/core/response/impulse-influence.ts';
+import { impulseResponseConvolution } from '../../src/core/response/impulse-response-convolution.ts';
+import { impulseResponse, impulseResponseInclusive } from '../../src/core/response/impulse-response.ts';
+import {
+  partialSumInclusive,
+  steadyStateSumExclusive,
+  steadyStateSumInclusive,
+} from '../../src/core/response/steady-state-sum.ts';
+import { gainRatioFromRecovery, timeToPeak, timeToRecover } from '../../src/core/response/time-to-recover.ts';
+import { mean } from '../../src/core/series/mean.ts';
+import { smoothingFactor } from '../../src/core/series/exponential-mean.ts';
+import { standardDeviationPopulation, standardDeviationSample } from '../../src/core/series/standard-deviation.ts';
+
+/** The functions under check by home and name. Rows call them only through this table, so that a test can put wrong ones in. */
+const homes = {
+  'domains/domain-of.ts': { domainOf },
+  'domains/extreme-bound.ts': { extremeBoundCycling, extremeBoundRunning },
+  'load/clock-minutes.ts': { clockMinutes },
+  'load/daily-sum.ts': { dailySum },
+  'load/domain-load.ts': { domainLoad },
+  'load/heart-rate-fraction.ts': { checkHeartRate, heartRateFraction },
+  'load/heart-rate-load-banister.ts': { heartRateLoadBanister },
+  'load/heart-rate-load-edwards.ts': { edwardsZoneEdges, edwardsZoneMinutes, heartRateLoadEdwards },
+  'load/heart-rate-load-three-phase.ts': { heartRateLoadThreePhase, phaseShares },
+  'load/monotony.ts': { monotonyPopulation, monotonySample, strain },
+  'load/session-rating-load.ts': { sessionRatingLoad },
+  'load/volume-load.ts': { volumeLoad },
+  'ratio/acute-chronic-coupled.ts': { acuteChronicCoupled },
+  'ratio/acute-chronic-exponential.ts': { acuteChronicExponential },
+  'ratio/acute-chronic-uncoupled.ts': { acuteChronicUncoupled },
+  'ratio/correlation.ts': { correlation },
+  'ratio/coupled-from-uncoupled.ts': { coupledFromUncoupled, uncoupledFromCoupled },
+  'response/impulse-component.ts': { impulseComponentExclusive, impulseComponentInclusive },
+  'response/impulse-influence.ts': { impulseInfluence },
+  'response/impulse-response-convolution.ts': { impulseResponseConvolution },
+  'response/impulse-response.ts': { impulseResponse, impulseResponseInclusive },
+  'response/steady-state-sum.ts': { partialSumInclusive, steadyStateSumExclusive, steadyStateSumInclusive },
+  'response/time-to-recover.ts': { gainRatioFromRecovery, timeToPeak, timeToRecover },
+  'series/exponential-mean.ts': { smoothingFactor },
+  'series/mean.ts': { mean },
+  'series/standard-deviation.ts': { standardDeviationPopulation, standardDeviationSample },
+};
+
+export type CoreFunction = (...args: unknown[]) => unknown;
+export type Core = Readonly<Record<string, CoreFunction>>;
+
+export const core: Core = Object.assign({}, ...Object.values(homes)) as Core;
+
+const homeOf: Readonly<Record<string, string>> = Object.fromEntries(
+  Object.entries(homes).flatMap(([file, functions]) =>
+    Object.keys(functions).map((name) => [name, `src/core/${file}#${name}`]),
+  ),
+);
+
+/** File and name of a function under check. */
+export function home(name: string): string {
+  const found = homeOf[name];
+  if (found === undefined) throw new Error(`no function ${name} among the functions under check`);
+  return found;
+}
