@@ -1,9 +1,6 @@
-import { domainOf } from '../../src/core/domains/domain-of.ts';
-import { extremeBoundCycling, extremeBoundRunning } from '../../src/core/domains/extreme-bound.ts';
 import { clockMinutes } from '../../src/core/load/clock-minutes.ts';
 import { dailySum } from '../../src/core/load/daily-sum.ts';
-import { domainLoad } from '../../src/core/load/domain-load.ts';
-import { checkHeartRate, heartRateFraction } from '../../src/core/load/heart-rate-fraction.ts';
+import { checkHeartRate } from '../../src/core/load/heart-rate-fraction.ts';
 import { heartRateLoadBanister } from '../../src/core/load/heart-rate-load-banister.ts';
 import {
   edwardsZoneEdges,
@@ -19,7 +16,6 @@ import { acuteChronicExponential } from '../../src/core/ratio/acute-chronic-expo
 import { acuteChronicUncoupled } from '../../src/core/ratio/acute-chronic-uncoupled.ts';
 import { correlation } from '../../src/core/ratio/correlation.ts';
 import { coupledFromUncoupled, uncoupledFromCoupled } from '../../src/core/ratio/coupled-from-uncoupled.ts';
-import { impulseComponentExclusive, impulseComponentInclusive } from '../../src/core/response/impulse-component.ts';
 import { impulseInfluence } from '../../src/core/response/impulse-influence.ts';
 import { impulseResponseConvolution } from '../../src/core/response/impulse-response-convolution.ts';
 import { impulseResponse, impulseResponseInclusive } from '../../src/core/response/impulse-response.ts';
@@ -29,18 +25,14 @@ import {
   steadyStateSumInclusive,
 } from '../../src/core/response/steady-state-sum.ts';
 import { gainRatioFromRecovery, timeToPeak, timeToRecover } from '../../src/core/response/time-to-recover.ts';
-import { mean } from '../../src/core/series/mean.ts';
 import { smoothingFactor } from '../../src/core/series/exponential-mean.ts';
-import { standardDeviationPopulation, standardDeviationSample } from '../../src/core/series/standard-deviation.ts';
+import { standardDeviationSample } from '../../src/core/series/standard-deviation.ts';
 
 /** The functions under check by home and name. Rows call them only through this table, so that a test can put wrong ones in. */
 const homes = {
-  'domains/domain-of.ts': { domainOf },
-  'domains/extreme-bound.ts': { extremeBoundCycling, extremeBoundRunning },
   'load/clock-minutes.ts': { clockMinutes },
   'load/daily-sum.ts': { dailySum },
-  'load/domain-load.ts': { domainLoad },
-  'load/heart-rate-fraction.ts': { checkHeartRate, heartRateFraction },
+  'load/heart-rate-fraction.ts': { checkHeartRate },
   'load/heart-rate-load-banister.ts': { heartRateLoadBanister },
   'load/heart-rate-load-edwards.ts': { edwardsZoneEdges, edwardsZoneMinutes, heartRateLoadEdwards },
   'load/heart-rate-load-three-phase.ts': { heartRateLoadThreePhase, phaseShares },
@@ -52,15 +44,13 @@ const homes = {
   'ratio/acute-chronic-uncoupled.ts': { acuteChronicUncoupled },
   'ratio/correlation.ts': { correlation },
   'ratio/coupled-from-uncoupled.ts': { coupledFromUncoupled, uncoupledFromCoupled },
-  'response/impulse-component.ts': { impulseComponentExclusive, impulseComponentInclusive },
   'response/impulse-influence.ts': { impulseInfluence },
   'response/impulse-response-convolution.ts': { impulseResponseConvolution },
   'response/impulse-response.ts': { impulseResponse, impulseResponseInclusive },
   'response/steady-state-sum.ts': { partialSumInclusive, steadyStateSumExclusive, steadyStateSumInclusive },
   'response/time-to-recover.ts': { gainRatioFromRecovery, timeToPeak, timeToRecover },
   'series/exponential-mean.ts': { smoothingFactor },
-  'series/mean.ts': { mean },
-  'series/standard-deviation.ts': { standardDeviationPopulation, standardDeviationSample },
+  'series/standard-deviation.ts': { standardDeviationSample },
 };
 
 export type CoreFunction = (...args: unknown[]) => unknown;

@@ -6,7 +6,8 @@ import type { Core } from './core.ts';
 import { home } from './core.ts';
 import type { PublishedCheck, PublishedWork } from './published.ts';
 
-export type Outcome = number | boolean | 'undefined' | 'rejected' | string;
+/** A number, true or false, 'undefined', 'rejected', or what went wrong. */
+export type Outcome = number | boolean | string;
 
 /** One counted check: what a function under src gave, beside what was expected. */
 export interface Row {
