@@ -8,6 +8,9 @@ export interface QueuedJob {
 
 /** Work to be done once, later, by a worker process (port and DI token). */
 export abstract class JobQueue {
-  /** Joins the transaction of the unit of work under way; false if a job with this name and key was ever queued. */
+  /**
+   * Joins the transaction of the unit of work under way. False if a job with this name and key waits, runs or is done;
+   * one that failed for good is queued again.
+   */
   abstract enqueueOnce(job: QueuedJob): Promise<boolean>;
 }
