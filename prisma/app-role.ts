@@ -6,25 +6,26 @@ const { escapeIdentifier, escapeLiteral } = pg;
 
 /**
  * Makes sure the role of API and worker can log in with its password and has no power over row-level security. Roles
- * belong to the whole server, so processes that prepare other databases of it may do the same at the same moment.
+ * belong to the whole server, so processes that prepare other databases of it may do the same at the same moment. The
+ * password of a role that was there already is only set anew where it is the derived one.
  */
-export async function ensureAppRole(client: pg.Client, appUrl: string, log: (line: string) => void): Promise<void> {
+export async function ensureAppRole(
+  client: pg.Client,
+  appUrl: string,
+  options: { derived: boolean; log: (line: string) => void },
+): Promise<void> {
   const { role, password } = roleOf(appUrl);
+  const withPassword = `${escapeIdentifier(role)} login password ${escapeLiteral(password)}`;
   if (!(await exists(client, role))) {
-    const statement = `create role ${escapeIdentifier(role)} login password ${escapeLiteral(password)}`;
     // 42710 or 23505: another process made it meanwhile.
-    const created = await whileOthersDoTheSame(client, statement, ['42710', '23505']);
-    if (created) log(`Role ${role} created.`);
-  }
-  if (!(await canLogIn(appUrl))) {
-    await whileOthersDoTheSame(
-      client,
-      `alter role ${escapeIdentifier(role)} login password ${escapeLiteral(password)}`,
-      [],
-    );
-    log(`Password of role ${role} set anew.`);
+    const created = await whileOthersDoTheSame(client, `create role ${withPassword}`, ['42710', '23505']);
+    if (created) options.log(`Role ${role} created.`);
   }
   await refusePower(client, role);
+  if (await canLogIn(appUrl)) return;
+  if (!options.derived) throw new Error(`Role ${role} cannot log in with the password in DATABASE_APP_URL.`);
+  await whileOthersDoTheSame(client, `alter role ${withPassword}`, []);
+  options.log(`Password of role ${role} set anew.`);
 }
 
 /** All that the services do, and nothing else: no TRUNCATE, no changes of tables, nothing with the migrations' history. */

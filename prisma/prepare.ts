@@ -28,7 +28,7 @@ export async function prepareDatabase(options: PrepareOptions): Promise<{ appUrl
     await refuseUnfitServer(client);
     await applyMigrations({ url: ownerUrl, migrationsDir: ownMigrationsDir(), log });
     await installQueue(ownerUrl);
-    await ensureAppRole(client, appUrl, log);
+    await ensureAppRole(client, appUrl, { derived: options.appUrl === undefined, log });
     await grantAppRole(client, appUrl);
   });
   return { appUrl };

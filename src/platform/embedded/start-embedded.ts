@@ -43,33 +43,32 @@ export async function startEmbedded(options: EmbeddedOptions): Promise<EmbeddedD
     log('Setting up the database for the first time.');
     await buildCluster(cluster, binaries, account, options.durable);
   }
-  const attached = runningServer(cluster) !== undefined && isWatched(cluster);
-  const stop = attached ? async () => undefined : await startOwn(cluster, binaries, account, options.durable);
+  const watched = runningServer(cluster) !== undefined && isWatched(cluster);
+  const stop = watched ? undefined : await startOwn(cluster, binaries, account, options.durable);
   const port = await readyPort(cluster);
-  const notes = [note, stop === undefined || attached ? 'The database server belongs to another process.' : undefined];
-  const said = notes.filter((line) => line !== undefined).join(' ');
+  const attached = stop === undefined ? 'The database server belongs to another process and ends with it.' : undefined;
+  const notes = [note, attached].filter((line) => line !== undefined);
   return {
     ownerUrl: ownerUrl(cluster, port),
     stop: stop ?? (async () => undefined),
     dataDir: cluster,
-    ...(said === '' ? {} : { note: said }),
+    ...(notes.length === 0 ? {} : { note: notes.join(' ') }),
   };
 }
 
 /** Starts or adopts the server. Undefined when another process started it at the same moment and looks after it. */
 async function startOwn(cluster: string, binaries: Binaries, account: Account | undefined, durable: boolean) {
+  // A server without a watchdog was left by a process whose watchdog was killed too: it is adopted.
+  const orphaned = runningServer(cluster) !== undefined;
   const watchdog = startWatchdog(cluster);
-  let won: boolean;
   try {
-    // A server without a watchdog was left by a process whose watchdog was killed too: it is adopted.
-    won = runningServer(cluster) !== undefined || (await startServer(cluster, binaries, account, durable));
+    if (!orphaned && !(await startServer(cluster, binaries, account, durable))) {
+      await watchdog.dismiss();
+      return undefined;
+    }
   } catch (error) {
     await watchdog.dismiss();
     throw error;
-  }
-  if (!won) {
-    await watchdog.dismiss();
-    return undefined;
   }
   watchdog.serverStarted();
   let stopped: Promise<void> | undefined;
@@ -95,7 +94,7 @@ async function startServer(cluster: string, binaries: Binaries, account: Account
 }
 
 async function readyPort(cluster: string): Promise<number> {
-  await until(() => runningServer(cluster)?.ready !== false, 60_000);
+  await until(() => runningServer(cluster)?.ready === true, 60_000);
   const server = runningServer(cluster);
   if (server?.ready !== true) throw new Error(`The database server in ${cluster} does not get ready.`);
   return server.port;

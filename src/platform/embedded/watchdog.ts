@@ -1,10 +1,12 @@
 import { spawn } from 'node:child_process';
-import { readFileSync, writeFileSync } from 'node:fs';
+import { readdirSync, rmSync, writeFileSync } from 'node:fs';
 import { extname, join } from 'node:path';
 import type { Socket } from 'node:net';
 import { fileURLToPath } from 'node:url';
 import { commandLine } from './server-process.ts';
 
+// A file of this name and the watchdog's number lies in the cluster for as long as that watchdog may be there.
+const prefix = 'loadweir-watchdog.';
 const entry = fileURLToPath(new URL(`./watchdog-main${extname(import.meta.url)}`, import.meta.url));
 
 export interface Watchdog {
@@ -32,27 +34,28 @@ export function startWatchdog(cluster: string): Watchdog {
   child.stdin.on('error', () => undefined);
   child.unref();
   (child.stdin as Socket).unref();
-  writeFileSync(pidFile(cluster), String(child.pid), { mode: 0o600 });
+  const mark = join(cluster, `${prefix}${child.pid}`);
+  writeFileSync(mark, '', { mode: 0o600 });
   return {
     serverStarted: () => child.stdin.write('started\n'),
     dismiss: async () => {
       child.ref();
       child.stdin.end('dismissed\n');
       await ended;
+      rmSync(mark, { force: true });
     },
   };
 }
 
-/** Whether some watchdog still looks after this cluster. */
+/** Whether some watchdog looks after this cluster. Several may: two processes that start at the same moment. */
 export function isWatched(cluster: string): boolean {
-  try {
-    const command = commandLine(Number(readFileSync(pidFile(cluster), 'utf8')));
-    return command !== undefined && command.includes('watchdog-main') && command.includes(cluster);
-  } catch {
-    return false;
-  }
-}
-
-function pidFile(cluster: string): string {
-  return join(cluster, 'loadweir-watchdog.pid');
+  const pids = readdirSync(cluster)
+    .filter((name) => name.startsWith(prefix))
+    .map((name) => Number(name.slice(prefix.length)));
+  return pids.some((pid) => {
+    const command = commandLine(pid);
+    const alive = command !== undefined && command.includes('watchdog-main') && command.includes(cluster);
+    if (!alive) rmSync(join(cluster, `${prefix}${pid}`), { force: true });
+    return alive;
+  });
 }
