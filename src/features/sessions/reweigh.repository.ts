@@ -1,0 +1,49 @@
+import type { ThresholdChange } from '../thresholds/thresholds.types.ts';
+import type { Quality, StoredWeight, WeighedSession } from './sessions.types.ts';
+
+/** Which sessions a change may touch. */
+export type ReweighScope =
+  | { kind: 'thresholds'; athleteId: string; changes: readonly ThresholdChange[] }
+  | { kind: 'policy'; squadId: string; from: string };
+
+export interface ReweighTask {
+  id: string;
+  /** The athlete by whom access to the task is judged: of a squad's task, one of its athletes. */
+  athleteId: string;
+  scope: ReweighScope;
+  total: number;
+  done: number;
+  touched: string[];
+  /** The last session looked at. */
+  cursor: string | null;
+  state: 'waiting' | 'running' | 'done';
+  createdAt: Date;
+  finishedAt: Date | null;
+}
+
+/** Sessions to be weighed anew and the tasks that do it in batches (port and DI token). */
+export abstract class ReweighRepository {
+  abstract count(scope: ReweighScope): Promise<number>;
+
+  /** Live sessions of the scope entered up to a moment, by id, from behind the cursor on. */
+  abstract candidates(
+    scope: ReweighScope,
+    options: { enteredUntil: Date; after: string | null; limit: number },
+  ): Promise<WeighedSession[]>;
+
+  /** Rewrites these weights and quality marks; everything else of a session stays. */
+  abstract save(
+    changed: readonly { sessionId: string; weight: StoredWeight; quality: Quality; qualityNotes: string[] }[],
+  ): Promise<void>;
+
+  /** One athlete of the scope. */
+  abstract anAthlete(scope: ReweighScope): Promise<string | null>;
+
+  abstract insertTask(task: ReweighTask): Promise<void>;
+  /** With `lock` nobody else works on the task until the unit of work ends. */
+  abstract task(id: string, options?: { lock?: boolean }): Promise<ReweighTask | null>;
+  abstract advance(
+    id: string,
+    progress: Pick<ReweighTask, 'done' | 'cursor' | 'state' | 'finishedAt'> & { touched: readonly string[] },
+  ): Promise<void>;
+}
