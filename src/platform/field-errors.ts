@@ -31,7 +31,12 @@ function fromIssue(issue: Issue, root: string): FieldError[] {
   const value = shown(field, issue.input);
   const hint = issue.code === 'custom' && typeof issue.params?.hint === 'string' ? issue.params.hint : undefined;
   return [
-    { field, ...(value === undefined ? {} : { value }), allowed: allowed(issue), ...(hint === undefined ? {} : { hint }) },
+    {
+      field,
+      ...(value === undefined ? {} : { value }),
+      allowed: allowed(issue),
+      ...(hint === undefined ? {} : { hint }),
+    },
   ];
 }
 
