@@ -1,0 +1,64 @@
+import { Module } from '@nestjs/common';
+import type { DynamicModule, Provider } from '@nestjs/common';
+import { AccessRepository } from '../features/access/access.repository.ts';
+import { AuditRepository } from '../features/access/audit.repository.ts';
+import { IdempotencyRepository } from '../features/access/idempotency.repository.ts';
+import { TokensRepository } from '../features/access/tokens.repository.ts';
+import { AthletesRepository } from '../features/athletes/athletes.repository.ts';
+import { ClubsRepository } from '../features/clubs/clubs.repository.ts';
+import { JobRecordRepository } from '../features/jobs/job-record.repository.ts';
+import { PeopleRepository } from '../features/people/people.repository.ts';
+import { PoliciesRepository } from '../features/policies/policies.repository.ts';
+import { SquadsRepository } from '../features/squads/squads.repository.ts';
+import { databaseAppUrl } from '../platform/database-url.ts';
+import type { Env } from '../platform/env.ts';
+import { JobQueue } from '../platform/job-queue.ts';
+import { Readiness } from '../platform/readiness.ts';
+import { UnitOfWork } from '../platform/unit-of-work.ts';
+import { BossJobQueue } from './boss-job-queue.ts';
+import { PrismaAccessRepository } from './prisma-access.repository.ts';
+import { PrismaAthletesRepository } from './prisma-athletes.repository.ts';
+import { PrismaAuditRepository } from './prisma-audit.repository.ts';
+import { PrismaClubsRepository } from './prisma-clubs.repository.ts';
+import { PrismaIdempotencyRepository } from './prisma-idempotency.repository.ts';
+import { PrismaJobRecordRepository } from './prisma-job-record.repository.ts';
+import { PrismaPeopleRepository } from './prisma-people.repository.ts';
+import { PrismaPoliciesRepository } from './prisma-policies.repository.ts';
+import { PrismaReadiness } from './prisma-readiness.ts';
+import { PrismaSquadsRepository } from './prisma-squads.repository.ts';
+import { PrismaTokensRepository } from './prisma-tokens.repository.ts';
+import { PrismaUnitOfWork } from './prisma-unit-of-work.ts';
+import { PrismaService } from './prisma.service.ts';
+
+/** Every port of the services and what stands behind it; one line each. */
+const ports: Provider[] = [
+  { provide: UnitOfWork, useClass: PrismaUnitOfWork },
+  { provide: Readiness, useClass: PrismaReadiness },
+  { provide: AccessRepository, useClass: PrismaAccessRepository },
+  { provide: AthletesRepository, useClass: PrismaAthletesRepository },
+  { provide: AuditRepository, useClass: PrismaAuditRepository },
+  { provide: ClubsRepository, useClass: PrismaClubsRepository },
+  { provide: IdempotencyRepository, useClass: PrismaIdempotencyRepository },
+  { provide: JobRecordRepository, useClass: PrismaJobRecordRepository },
+  { provide: PeopleRepository, useClass: PrismaPeopleRepository },
+  { provide: PoliciesRepository, useClass: PrismaPoliciesRepository },
+  { provide: SquadsRepository, useClass: PrismaSquadsRepository },
+  { provide: TokensRepository, useClass: PrismaTokensRepository },
+];
+
+@Module({})
+export class PersistenceModule {
+  static for(env: Env): DynamicModule {
+    const database: Provider = {
+      provide: PrismaService,
+      useFactory: () => new PrismaService({ url: databaseAppUrl(env) }),
+    };
+    const queue: Provider = { provide: JobQueue, useFactory: () => new BossJobQueue({ url: databaseAppUrl(env) }) };
+    return {
+      module: PersistenceModule,
+      global: true,
+      providers: [database, queue, ...ports],
+      exports: [PrismaService, JobQueue, ...ports.map((port) => ('provide' in port ? port.provide : port))],
+    };
+  }
+}
