@@ -1,0 +1,40 @@
+import { Module } from '@nestjs/common';
+import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE, DiscoveryModule } from '@nestjs/core';
+import { AccessRules } from './access-rules.ts';
+import { AthletesController } from './athletes.controller.ts';
+import { ClubsController } from './clubs.controller.ts';
+import { HealthController } from './health.controller.ts';
+import { JobRunsController } from './job-runs.controller.ts';
+import { MeController } from './me.controller.ts';
+import { PeopleController } from './people.controller.ts';
+import { PoliciesController } from './policies.controller.ts';
+import { ProblemFilter } from './problem.filter.ts';
+import { RequestInterceptor } from './request.interceptor.ts';
+import { RouteTable } from './route-table.ts';
+import { SquadsController } from './squads.controller.ts';
+import { TokensController } from './tokens.controller.ts';
+import { ZodPipe } from './zod.pipe.ts';
+
+@Module({
+  imports: [DiscoveryModule],
+  controllers: [
+    AthletesController,
+    ClubsController,
+    HealthController,
+    JobRunsController,
+    MeController,
+    PeopleController,
+    PoliciesController,
+    SquadsController,
+    TokensController,
+  ],
+  providers: [
+    AccessRules,
+    RouteTable,
+    { provide: APP_INTERCEPTOR, useClass: RequestInterceptor },
+    { provide: APP_PIPE, useClass: ZodPipe },
+    { provide: APP_FILTER, useClass: ProblemFilter },
+  ],
+  exports: [RouteTable],
+})
+export class HttpModule {}

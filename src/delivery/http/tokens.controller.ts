@@ -1,0 +1,49 @@
+import { Body, Controller, Delete, Get, Param, Post } from '@nestjs/common';
+import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import type { Principal } from '../../features/access/access.types.ts';
+import {
+  issuedTokenSchema,
+  tokenInputSchema,
+  tokenListSchema,
+  tokenParamsSchema,
+} from '../../features/access/tokens.schema.ts';
+import type { TokenInput } from '../../features/access/tokens.schema.ts';
+import { TokensService } from '../../features/access/tokens.service.ts';
+import { personParamsSchema } from '../../features/people/people.schema.ts';
+import { Access, CurrentPrincipal } from './access.decorator.ts';
+import { Answer } from './answer.decorator.ts';
+
+@ApiTags('people')
+@ApiBearerAuth()
+@Controller('v1/people/:personId/tokens')
+export class TokensController {
+  constructor(private readonly tokens: TokensService) {}
+
+  /** The secret is shown in this answer only. */
+  @Post()
+  @Access('tokens.write', { kind: 'person', param: 'personId' })
+  @Answer(201, issuedTokenSchema)
+  async issue(
+    @Param({ schema: personParamsSchema }) { personId }: { personId: string },
+    @Body({ schema: tokenInputSchema }) input: TokenInput,
+    @CurrentPrincipal() { clubId }: Principal,
+  ) {
+    return this.tokens.issue(clubId, personId, input);
+  }
+
+  @Get()
+  @Access('tokens.read', { kind: 'person', param: 'personId' })
+  @Answer(200, tokenListSchema)
+  async list(@Param({ schema: personParamsSchema }) { personId }: { personId: string }) {
+    return { items: await this.tokens.list(personId) };
+  }
+
+  @Delete(':tokenId')
+  @Access('tokens.write', { kind: 'person', param: 'personId' })
+  @Answer(204)
+  async revoke(
+    @Param({ schema: tokenParamsSchema }) { personId, tokenId }: { personId: string; tokenId: string },
+  ): Promise<void> {
+    await this.tokens.revoke(personId, tokenId);
+  }
+}

@@ -1,0 +1,40 @@
+import { Module } from '@nestjs/common';
+import type { DynamicModule } from '@nestjs/common';
+import { AccessModule } from './features/access/access.module.ts';
+import { AthletesModule } from './features/athletes/athletes.module.ts';
+import { ClubsModule } from './features/clubs/clubs.module.ts';
+import { JobRecordsModule } from './features/jobs/jobs.module.ts';
+import { PeopleModule } from './features/people/people.module.ts';
+import { PoliciesModule } from './features/policies/policies.module.ts';
+import { SquadsModule } from './features/squads/squads.module.ts';
+import { PersistenceModule } from './persistence/persistence.module.ts';
+import { Clock } from './platform/clock.ts';
+import type { Env } from './platform/env.ts';
+import { ENV } from './platform/tokens.ts';
+
+const features = [
+  AccessModule,
+  AthletesModule,
+  ClubsModule,
+  JobRecordsModule,
+  PeopleModule,
+  PoliciesModule,
+  SquadsModule,
+];
+
+/** What the API and the worker share: environment, clock, persistence and every feature. */
+@Module({})
+export class ServicesModule {
+  static for(env: Env, clock: Clock): DynamicModule {
+    return {
+      module: ServicesModule,
+      global: true,
+      imports: [PersistenceModule.for(env), ...features],
+      providers: [
+        { provide: ENV, useValue: env },
+        { provide: Clock, useValue: clock },
+      ],
+      exports: [ENV, Clock, ...features],
+    };
+  }
+}
