@@ -32,6 +32,11 @@ export class PrismaJobRecordRepository extends JobRecordRepository {
     return rows.map(({ id, clubId, name, zone, createdAt }) => ({ squadId: id, clubId, name, zone, createdAt }));
   }
 
+  async clubNames(): Promise<Map<string, string>> {
+    const rows = await currentTransaction().club.findMany({ select: { id: true, name: true } });
+    return new Map(rows.map(({ id, name }) => [id, name]));
+  }
+
   async claimed(runs: readonly JobKey[]): Promise<JobKey[]> {
     if (runs.length === 0) return [];
     const rows = await currentTransaction().jobRecord.findMany({

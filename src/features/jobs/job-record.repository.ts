@@ -12,6 +12,8 @@ export interface JobRecordState {
 export abstract class JobRecordRepository {
   /** Operator only: the squads of all clubs. */
   abstract squadsOfAllClubs(): Promise<ScheduledSquad[]>;
+  /** Operator only: names of all clubs by id. */
+  abstract clubNames(): Promise<Map<string, string>>;
   /** Operator only: those of the runs that have a record. */
   abstract claimed(runs: readonly JobKey[]): Promise<JobKey[]>;
 
