@@ -51,7 +51,7 @@ export type Env = Readonly<Omit<z.output<typeof schema>, 'LOADWEIR_CLOCK_OFFSET_
 };
 
 /** Reads and checks the environment once; an empty variable counts as unset. @throws {EnvError} naming all bad ones. */
-export function readEnv(source: NodeJS.ProcessEnv): Env {
+export function readEnv(source: NodeJS.ProcessEnv = process.env): Env {
   const given = Object.fromEntries(Object.entries(source).filter(([, value]) => value !== undefined && value !== ''));
   const result = schema.safeParse(given);
   const problems = (result.error?.issues ?? []).map(({ path, message }) => ({ variable: String(path[0]), message }));
