@@ -1,5 +1,6 @@
 import { setTimeout as sleep } from 'node:timers/promises';
 import pg from 'pg';
+import { UnavailableError } from '../src/platform/errors.ts';
 import { QUEUE_SCHEMA } from './queue-schema.ts';
 
 const { escapeIdentifier, escapeLiteral } = pg;
@@ -23,7 +24,7 @@ export async function ensureAppRole(
   }
   await refusePower(client, role);
   if (await canLogIn(appUrl)) return;
-  if (!options.derived) throw new Error(`Role ${role} cannot log in with the password in DATABASE_APP_URL.`);
+  if (!options.derived) throw new UnavailableError(`Role ${role} cannot log in with the password in DATABASE_APP_URL.`);
   await whileOthersDoTheSame(client, `alter role ${withPassword}`, []);
   options.log(`Password of role ${role} set anew.`);
 }
@@ -81,7 +82,7 @@ async function refusePower(client: pg.Client, role: string): Promise<void> {
     [role],
   );
   if (rows[0]?.powerful !== false) {
-    throw new Error(
+    throw new UnavailableError(
       `Role ${role} may bypass row-level security or act as the owner: name another in DATABASE_APP_URL.`,
     );
   }

@@ -1,5 +1,6 @@
 import { setTimeout as sleep } from 'node:timers/promises';
 import pg from 'pg';
+import { UnavailableError } from '../src/platform/errors.ts';
 
 /**
  * Runs `work` while this database's advisory lock of that name is held, on a connection of its own. It asks again and
@@ -10,12 +11,23 @@ export async function withLock<T>(url: string, name: string, work: (client: pg.C
   const client = new pg.Client({ connectionString: url, application_name: name, options: '-c TimeZone=UTC' });
   // The loss of this connection shows in the statements; without a listener it would end the process.
   client.on('error', () => undefined);
-  await client.connect();
+  await connect(client);
   try {
     while (!(await tryLock(client, name))) await sleep(100);
     return await work(client);
   } finally {
     await client.end();
+  }
+}
+
+async function connect(client: pg.Client): Promise<void> {
+  try {
+    await client.connect();
+  } catch (error) {
+    const { code, message } = error as NodeJS.ErrnoException;
+    // Where every address of a host fails, the error has a code and no message.
+    const reason = message === '' ? (code ?? 'no reason given') : message;
+    throw new UnavailableError(`The database cannot be reached: ${reason}`, { cause: error });
   }
 }
 

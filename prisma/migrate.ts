@@ -2,6 +2,7 @@ import { fork } from 'node:child_process';
 import { existsSync } from 'node:fs';
 import { extname } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { UnavailableError } from '../src/platform/errors.ts';
 import type { MigrateAnswer, MigrateOrder } from './migrate-main.ts';
 
 export interface ApplyMigrationsOptions {
@@ -34,7 +35,7 @@ export async function applyMigrations(options: ApplyMigrationsOptions): Promise<
   });
   child.disconnect();
   for (const line of answer.notes) options.log?.(line);
-  if (answer.error !== undefined) throw new Error(answer.error);
+  if (answer.error !== undefined) throw new UnavailableError(answer.error, { code: 'migrations-not-applied' });
   for (const name of answer.applied) options.log?.(`Migration ${name} applied.`);
   return answer.applied;
 }

@@ -1,6 +1,7 @@
 import { PgBoss } from 'pg-boss';
 import type pg from 'pg';
 import { databaseAppUrl } from '../src/platform/database-url.ts';
+import { UnavailableError } from '../src/platform/errors.ts';
 import { ensureAppRole, grantAppRole } from './app-role.ts';
 import { withLock } from './lock.ts';
 import { applyMigrations, ownMigrationsDir } from './migrate.ts';
@@ -39,8 +40,8 @@ async function refuseUnfitServer(client: pg.Client): Promise<void> {
     "select current_setting('server_version_num')::int as version, current_setting('server_encoding') as encoding",
   );
   const { version = 0, encoding = '' } = rows[0] ?? {};
-  if (version < oldestMajor * 10_000) throw new Error(`PostgreSQL ${oldestMajor} or newer is needed.`);
-  if (encoding !== 'UTF8') throw new Error(`The database's encoding is ${encoding}; it has to be UTF8.`);
+  if (version < oldestMajor * 10_000) throw new UnavailableError(`PostgreSQL ${oldestMajor} or newer is needed.`);
+  if (encoding !== 'UTF8') throw new UnavailableError(`The database's encoding is ${encoding}; it has to be UTF8.`);
 }
 
 /** The queue's tables belong to the owner; the services start their queue with `migrate: false`. */

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
 import { spawn } from 'node:child_process';
+import { UnavailableError } from '../errors.ts';
 
 /** The account the server runs as where the starting process is root, which PostgreSQL refuses. */
 export interface Account {
@@ -16,7 +17,7 @@ export function serverAccount(): Account | undefined {
     const [, , uid, gid] = lines.find((line) => line.startsWith(`${name}:`))?.split(':') ?? [];
     if (uid !== undefined && gid !== undefined) return { name, uid: Number(uid), gid: Number(gid) };
   }
-  throw new Error('As root an account named postgres or nobody is needed to run the embedded PostgreSQL.');
+  throw new UnavailableError('As root an account named postgres or nobody is needed to run the embedded PostgreSQL.');
 }
 
 export interface Outcome {

@@ -1,6 +1,7 @@
 import { createRequire } from 'node:module';
 import { cpSync, existsSync, mkdirSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import { dirname, join } from 'node:path';
+import { UnavailableError } from '../errors.ts';
 import { runAs } from './account.ts';
 import type { Account } from './account.ts';
 
@@ -29,7 +30,8 @@ export async function findBinaries(
   const copy = join(fallback, `postgresql-${version}`);
   if (!existsSync(copy)) copyWhole(home, copy);
   const copied = programs(copy, version);
-  if (!(await runs(account, copied))) throw new Error(`Account ${account.name} cannot run the programs in ${copy}.`);
+  if (!(await runs(account, copied)))
+    throw new UnavailableError(`Account ${account.name} cannot run the programs in ${copy}.`);
   return copied;
 }
 
@@ -39,7 +41,7 @@ function locatePackage(): InstalledPackage {
   try {
     root = dirname(dirname(createRequire(import.meta.url).resolve(name)));
   } catch {
-    throw new Error(
+    throw new UnavailableError(
       `There is no embedded PostgreSQL for this machine (package ${name} is not installed). ` +
         'Set DATABASE_URL to a PostgreSQL 15 or newer instead.',
     );

@@ -1,6 +1,7 @@
 import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, readFileSync, realpathSync, writeFileSync } from 'node:fs';
 import { join, resolve } from 'node:path';
+import { UnavailableError } from '../errors.ts';
 import { canEnter } from './account.ts';
 import type { Account } from './account.ts';
 
@@ -30,7 +31,9 @@ export async function findPlace(
   if (existsSync(pointer)) return elsewhere(readFileSync(pointer, 'utf8').trim(), folder, true);
   if (await canEnter(account, folder)) return { cluster: own };
   if (existsSync(own)) {
-    throw new Error(`The database lies in ${own}, but account ${account?.name ?? ''} may not enter ${folder}.`);
+    throw new UnavailableError(
+      `The database lies in ${own}, but account ${account?.name ?? ''} may not enter ${folder}.`,
+    );
   }
   const home = join(sharedHome, createHash('sha256').update(folder).digest('hex').slice(0, 12));
   mkdirSync(home, { recursive: true, mode: 0o755 });
@@ -41,7 +44,9 @@ export async function findPlace(
 
 function elsewhere(cluster: string, folder: string, expected: boolean): Place {
   if (expected && !existsSync(join(cluster, '..'))) {
-    throw new Error(`The database of ${folder} was kept in ${cluster}, which is gone. Without it, remove ${folder}.`);
+    throw new UnavailableError(
+      `The database of ${folder} was kept in ${cluster}, which is gone. Without it, remove ${folder}.`,
+    );
   }
   return { cluster, note: `The database server may not enter ${folder}: its data is kept in ${cluster}.` };
 }

@@ -2,6 +2,7 @@ import { existsSync, readFileSync, statSync, truncateSync } from 'node:fs';
 import { createServer } from 'node:net';
 import type { AddressInfo } from 'node:net';
 import { join } from 'node:path';
+import { UnavailableError } from '../errors.ts';
 import { runAs, serverAccount } from './account.ts';
 import type { Account } from './account.ts';
 import { findBinaries } from './binaries.ts';
@@ -90,13 +91,13 @@ async function startServer(cluster: string, binaries: Binaries, account: Account
     output = outcome.output;
   }
   const tail = existsSync(serverLog) ? readFileSync(serverLog, 'utf8').split('\n').slice(-12).join('\n') : '';
-  throw new Error(`The database server in ${cluster} does not start:\n${output}${tail}`);
+  throw new UnavailableError(`The database server in ${cluster} does not start:\n${output}${tail}`);
 }
 
 async function readyPort(cluster: string): Promise<number> {
   await until(() => runningServer(cluster)?.ready === true, 60_000);
   const server = runningServer(cluster);
-  if (server?.ready !== true) throw new Error(`The database server in ${cluster} does not get ready.`);
+  if (server?.ready !== true) throw new UnavailableError(`The database server in ${cluster} does not get ready.`);
   return server.port;
 }
 
