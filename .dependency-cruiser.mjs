@@ -1,10 +1,11 @@
 // One direction, plain rooms. Each rule is an allow-list: what is not named is refused.
-// A composition root (a module file, a main file, a command) may import anything.
-const roots = '(\\.module\\.ts$|main\\.ts$|http-app\\.ts$|^src/commands/)';
+// A composition root (a module file, a main file, a command) may import anything. domain.ts is no main.ts.
+const roots = '(\\.module\\.ts$|[/.]main\\.ts$|^src/http-app\\.ts$|^jobs/worker\\.ts$|^src/commands/)';
+const rooms = '^(src/(core|platform|features|persistence|delivery|demo)|jobs|reports|prisma)/';
 const own = '^(src|jobs|reports|prisma|test)/';
 
-/** From one room, only these paths of the project and these packages. */
-function room(name, from, ownPaths, packages, builtIns) {
+/** From one room, only these paths of the project, these packages and these built-ins of Node. */
+function room(name, from, ownPaths, packages, builtIns = []) {
   const rules = [
     {
       name: `${name}-own`,
@@ -19,12 +20,12 @@ function room(name, from, ownPaths, packages, builtIns) {
       to: { path: 'node_modules', pathNot: packages.length ? packages.map((p) => `node_modules/${p}/`) : ['^$'] },
     },
   ];
-  if (!builtIns) {
+  if (builtIns !== 'any') {
     rules.push({
       name: `${name}-built-ins`,
       severity: 'error',
       from: { path: from, pathNot: roots },
-      to: { dependencyTypes: ['core'] },
+      to: { dependencyTypes: ['core'], ...(builtIns.length ? { pathNot: `^(node:)?(${builtIns.join('|')})$` } : {}) },
     });
   }
   return rules;
@@ -35,7 +36,8 @@ export default {
   forbidden: [
     { name: 'no-cycles', severity: 'error', from: {}, to: { circular: true } },
     { name: 'resolvable', severity: 'error', from: {}, to: { couldNotResolve: true } },
-    ...room('core', '^src/core/', ['^src/core/'], [], false),
+    { name: 'in-a-room', severity: 'error', from: { path: own, pathNot: [rooms, roots, '^test/'] }, to: {} },
+    ...room('core', '^src/core/', ['^src/core/'], []),
     ...room(
       'platform',
       '^src/platform/',
@@ -49,17 +51,16 @@ export default {
         'nodemailer',
         'temporal-polyfill',
         'rxjs',
-        'fastify',
-        '@types/.*',
+        '@types/(node|nodemailer)',
       ],
-      true,
+      'any',
     ),
     ...room(
       'features',
       '^src/features/',
       ['^src/core/', '^src/platform/', '^src/features/'],
       [...nest, 'zod', 'temporal-polyfill', 'csv-parse'],
-      true,
+      ['crypto'],
     ),
     {
       name: 'features-own-folder',
@@ -76,15 +77,15 @@ export default {
         '^src/core/.*types\\.ts$',
         '^src/platform/',
       ],
-      [...nest, '@prisma/.*', 'pg', 'pg-boss', '@types/.*', 'zod', 'temporal-polyfill'],
-      true,
+      [...nest, '@prisma/.*', 'pg', 'pg-boss', '@types/pg', 'zod', 'temporal-polyfill'],
+      'any',
     ),
     ...room(
       'reports',
       '^reports/',
       ['^reports/', '^src/features/.*\\.(service|types)\\.ts$', '^src/core/.*types\\.ts$', '^src/platform/'],
       [...nest, 'exceljs', 'echarts', '@resvg/.*', '@expo-google-fonts/.*', 'zod', 'temporal-polyfill'],
-      true,
+      'any',
     ),
     {
       name: 'workbook-sees-its-view-only',
@@ -96,24 +97,24 @@ export default {
       'delivery',
       '^src/delivery/',
       ['^src/delivery/', '^src/features/', '^reports/', '^src/platform/', '^src/core/.*types\\.ts$'],
-      ['@nestjs/.*', 'zod', 'fastify', '@fastify/.*', 'rxjs', 'nestjs-pino', 'pino', 'pino-http', '@types/.*'],
-      true,
+      ['@nestjs/.*', 'zod', 'fastify', '@fastify/.*', 'rxjs', 'nestjs-pino', 'pino', 'pino-http'],
+      'any',
     ),
     ...room(
       'jobs',
       '^jobs/',
       ['^jobs/', '^src/features/', '^reports/', '^src/platform/'],
       ['@nestjs/.*', 'zod', 'temporal-polyfill', 'rxjs'],
-      true,
+      'any',
     ),
     ...room(
       'prisma',
       '^prisma/',
       ['^prisma/', '^src/platform/'],
-      ['@prisma/.*', 'prisma', 'pg', 'pg-boss', '@types/.*'],
-      true,
+      ['@prisma/.*', 'prisma', 'pg', 'pg-boss', '@types/pg'],
+      'any',
     ),
-    ...room('scenario', '^src/demo/', ['^src/demo/'], [], true),
+    ...room('scenario', '^src/demo/', ['^src/demo/'], [], 'any'),
   ],
   options: {
     doNotFollow: { path: 'node_modules' },
