@@ -35,7 +35,7 @@ export function controllerRoutes(controller: { name: string; prototype: object }
     const rule = Reflect.getMetadata(ACCESS_RULE, handler) as AccessRule | null | undefined;
     const common = {
       name: `${type.name}.${key}`,
-      method: RequestMethod[method]!,
+      method: RequestMethod[method],
       rule,
       unchecked: unchecked(type, key),
     };

@@ -25,7 +25,7 @@ export function createAdapter(clock: Clock): FastifyAdapter {
 
 /** Headers, bodies and closing; before any route is registered. */
 export async function prepareServer(app: NestFastifyApplication): Promise<void> {
-  const server = app.getHttpAdapter().getInstance() as unknown as FastifyInstance;
+  const server = app.getHttpAdapter().getInstance();
   const routes = app.get(RouteTable);
   server.addHook('onRoute', ({ method, url }) => routes.add(method, url));
   acceptBodies(server);
