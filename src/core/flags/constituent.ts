@@ -48,10 +48,10 @@ export function stretches(
     }
     inside = today.inside ? inside + 1 : 0;
     if (inside >= clearAfter) {
-      done.push({ ...(open), until: day });
+      done.push({ ...open, until: day });
       open = null;
     } else {
-      open = { ...(open), strength, evidence };
+      open = { ...open, strength, evidence };
     }
   });
   return open === null ? done : [...done, open];

@@ -1,3 +1,4 @@
+import { NumericInputError } from '../numeric-input-error.ts';
 import { within } from '../guard.ts';
 
 /**
@@ -7,7 +8,7 @@ import { within } from '../guard.ts';
  *
  * @param minutes minutes in phases I, II, III [min], each 0 or more
  * @returns load [weighted min]
- * @throws NumericInputError on negative minutes
+ * @throws NumericInputError on negative minutes or another number of phases
  * @remarks Equation: load = 1·I + 2·II + 3·III.
  * Limits: a minute just above the second threshold counts like an all-out one; 1-2-3 is a convention; heart rate lags behind short hard work.
  * @see Lucía A et al. 2003, Tour de France versus Vuelta a España, Med Sci Sports Exerc 35(5):872–878, doi 10.1249/01.MSS.0000064999.82036.B4
@@ -15,6 +16,9 @@ import { within } from '../guard.ts';
  * heartRateLoadThreePhase([4581, 1354, 487]); // => 8750
  */
 export function heartRateLoadThreePhase(minutes: readonly [number, number, number]): number {
+  const { length }: readonly number[] = minutes;
+  if (length !== 3)
+    throw new NumericInputError('heartRateLoadThreePhase', 'minutes', minutes, 'minutes of exactly 3 phases');
   checkMinutes('heartRateLoadThreePhase', minutes);
   return minutes[0] + 2 * minutes[1] + 3 * minutes[2];
 }
