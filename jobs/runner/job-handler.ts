@@ -3,9 +3,9 @@ import type { JobId, JobKey } from '../../src/features/jobs/jobs.types.ts';
 /** What a handler works with: every step is one unit of work of the club, and fails once a later attempt took over. */
 export interface JobRun extends JobKey {
   clubId: string;
-  step<T>(work: () => Promise<T>): Promise<T>;
+  readonly step: <T>(work: () => Promise<T>) => Promise<T>;
   /** A step that is done once over all attempts; its mark is kept in the same transaction. False if it was done before. */
-  stepOnce(mark: string, work: () => Promise<void>): Promise<boolean>;
+  readonly stepOnce: (mark: string, work: () => Promise<void>) => Promise<boolean>;
 }
 
 /** A job that runs for a squad and a period. */
@@ -16,3 +16,6 @@ export interface JobHandler {
   /** In one unit of work: what `run` would make and send, one line each. Writes nothing. */
   preview(run: JobKey): Promise<string[]>;
 }
+
+/** DI token of all handlers. */
+export const JOB_HANDLERS = Symbol('loadweir:job-handlers');
