@@ -36,12 +36,14 @@ export abstract class ReweighRepository {
     changed: readonly { sessionId: string; weight: StoredWeight; quality: Quality; qualityNotes: string[] }[],
   ): Promise<void>;
 
-  /** One athlete of the scope. */
-  abstract anAthlete(scope: ReweighScope): Promise<string | null>;
+  /** The athletes of the scope, by id. */
+  abstract athletes(scope: ReweighScope): Promise<string[]>;
 
-  abstract insertTask(task: ReweighTask): Promise<void>;
-  /** With `lock` nobody else works on the task until the unit of work ends. */
-  abstract task(id: string, options?: { lock?: boolean }): Promise<ReweighTask | null>;
+  /** Nobody else works on the task until the unit of work ends. */
+  abstract holdTask(id: string): Promise<void>;
+  /** Answers the club it belongs to. */
+  abstract insertTask(task: ReweighTask): Promise<string>;
+  abstract task(id: string): Promise<ReweighTask | null>;
   abstract advance(
     id: string,
     progress: Pick<ReweighTask, 'done' | 'cursor' | 'state' | 'finishedAt'> & { touched: readonly string[] },

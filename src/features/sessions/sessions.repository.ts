@@ -13,6 +13,14 @@ export interface WritingPlan {
   days: readonly AthleteDay[];
 }
 
+export interface AthletesPlan {
+  /** Squads whose policy is read. */
+  squadIds: readonly string[];
+  /** The squad whose policy changes. */
+  changedSquadId: string | null;
+  athleteIds: readonly string[];
+}
+
 export interface SessionPage {
   athleteId: string;
   from?: string | undefined;
@@ -34,8 +42,8 @@ export abstract class SessionsRepository {
    */
   abstract holdForWriting(plan: WritingPlan): Promise<void>;
 
-  /** The same for all days of these athletes. */
-  abstract holdAthletes(squadIds: readonly string[], athleteIds: readonly string[]): Promise<void>;
+  /** The same for all days of these athletes; and no session is weighed by the policy of the squad that changes. */
+  abstract holdAthletes(plan: AthletesPlan): Promise<void>;
 
   /** Minutes of the live sessions of each day, without one session: 'athlete|day' → minutes. */
   abstract minutesOfDays(days: readonly AthleteDay[], exceptSessionId?: string): Promise<Map<string, number>>;

@@ -29,16 +29,6 @@ export function resolveThresholds<V extends Dated>(
   return set;
 }
 
-/** The same as a plain set for weighing. */
-export function thresholdSet(
-  values: readonly Dated[],
-  day: string,
-  modality: Modality,
-  setting: Setting,
-): ThresholdSet {
-  return resolveThresholds(values, day, modality, setting);
-}
-
 function inForce(value: Dated, day: string): boolean {
   return value.withdrawnAt === null && value.validFrom <= day && (value.validTo === null || day <= value.validTo);
 }

@@ -5,7 +5,7 @@ import { presentThreshold } from './present-threshold.ts';
 import { resolveThresholds } from './resolve-thresholds.ts';
 import { ThresholdsRepository } from './thresholds.repository.ts';
 import type { InForceQuery, ThresholdQuery, ThresholdValueView } from './thresholds.schema.ts';
-import type { Modality, Quantity, Setting, ThresholdValue } from './thresholds.types.ts';
+import type { Modality, Quantity, Setting, ThresholdResolver, ThresholdValue } from './thresholds.types.ts';
 
 /** Reads thresholds. */
 @Injectable()
@@ -15,10 +15,11 @@ export class ThresholdsService {
     private readonly access: AccessService,
   ) {}
 
-  /** All values of these athletes, withdrawn ones too. */
-  async valuesOf(athleteIds: readonly string[]): Promise<Map<string, ThresholdValue[]>> {
-    const values = await this.thresholds.list(athleteIds);
-    return Map.groupBy(values, ({ athleteId }) => athleteId);
+  /** Reads all values of these athletes at once; the answer resolves the set in force wherever it is asked. */
+  async resolver(athleteIds: readonly string[]): Promise<ThresholdResolver> {
+    const values = Map.groupBy(await this.thresholds.list(athleteIds), ({ athleteId }) => athleteId);
+    return (athleteId, day, modality, setting) =>
+      resolveThresholds(values.get(athleteId) ?? [], day, modality, setting);
   }
 
   /** The set in force on a day for one modality and setting. */

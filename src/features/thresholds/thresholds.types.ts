@@ -88,6 +88,9 @@ export type ResolvedThreshold = Pick<ThresholdValue, 'id' | 'quantity' | 'value'
 /** The set in force: one value a quantity. */
 export type ThresholdSet = ReadonlyMap<Quantity, ResolvedThreshold>;
 
+/** The set in force for an athlete on a day, for one modality and setting. */
+export type ThresholdResolver = (athleteId: string, day: string, modality: Modality, setting: Setting) => ThresholdSet;
+
 /** Days on which the value in force of one series has changed; null = from then on. */
 export interface ThresholdChange extends ThresholdSeries {
   from: string;
