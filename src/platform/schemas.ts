@@ -20,14 +20,14 @@ export const zoneSchema = z
   .max(64)
   .refine(isZone, { error: 'an IANA time zone like Europe/Prague' });
 
-/** One line of text, trimmed, without control characters, 1 to `max` characters. */
+/** One line of text, trimmed, without control characters and halves of characters, 1 to `max` characters. */
 export const lineSchema = (max: number) =>
   z
     .string({ error: `text of 1 to ${max} characters` })
     .trim()
     .min(1, { error: `text of 1 to ${max} characters` })
     .max(max, { error: `text of 1 to ${max} characters` })
-    .regex(/^\P{Cc}*$/u, { error: 'text without control characters' });
+    .regex(/^[^\p{Cc}\p{Cs}]*$/u, { error: 'text without control characters' });
 
 export const isoWeekSchema = z
   .string()
