@@ -57,7 +57,8 @@ export async function foundClub(
       body: {
         name: person.name,
         email: person.email,
-        roles: [{ role: 'roles' in person ? 'athlete' : person.key, squadId: squad.id }],
+        // An athlete's role reaches the own data only, in whatever squad.
+        roles: ['roles' in person ? { role: 'athlete' } : { role: person.key, squadId: squad.id }],
       },
     });
     personIds.set(person.key, id);
