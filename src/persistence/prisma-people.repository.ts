@@ -44,7 +44,7 @@ export class PrismaPeopleRepository extends PeopleRepository {
 async function rolesOf(personIds: string[]): Promise<Map<string, AssignedRole[]>> {
   const rows = await currentTransaction().roleAssignment.findMany({
     where: { personId: { in: personIds } },
-    orderBy: [{ createdAt: 'asc' }, { id: 'asc' }],
+    orderBy: [{ createdAt: 'asc' }, { role: 'asc' }, { squadId: 'asc' }],
   });
   const byPerson = Map.groupBy(rows, ({ personId }) => personId);
   const toRole = ({ id, role, squadId }: (typeof rows)[number]) => {

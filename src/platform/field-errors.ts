@@ -28,7 +28,7 @@ function fromIssue(issue: Issue, root: string): FieldError[] {
     }
   }
   const field = place(issue.path, root);
-  const value = shown(field, issue.input);
+  const value = shown(field, given(issue));
   const hint = issue.code === 'custom' && typeof issue.params?.hint === 'string' ? issue.params.hint : undefined;
   return [
     {
@@ -54,6 +54,13 @@ function place(path: readonly PropertyKey[], root: string): string {
     root,
   );
   return text === '' ? '(whole input)' : text.slice(0, 200);
+}
+
+/** A rule over several fields reports the object they stand in, and names the one at fault as the end of its path. */
+function given({ code, input, path }: Issue): unknown {
+  if (code !== 'custom' || typeof input !== 'object' || input === null) return input;
+  const name = path.at(-1);
+  return name !== undefined && Object.hasOwn(input, name) ? (input as Record<PropertyKey, unknown>)[name] : undefined;
 }
 
 function shown(field: string, value: unknown): unknown {

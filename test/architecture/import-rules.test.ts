@@ -133,7 +133,7 @@ async function cruise(folder: string, config: string, places: string[]): Promise
   const output = await new Promise<string>((done, fail) => {
     const args = [bin, '--config', config, '--output-type', 'json', ...places];
     execFile(process.execPath, args, { cwd: folder, maxBuffer: 64 * 1024 * 1024 }, (error, stdout, stderr) =>
-      stdout === '' ? fail(new Error(stderr || String(error))) : done(stdout),
+      stdout === '' ? fail(new Error(stderr || error?.message)) : done(stdout),
     );
   });
   return (JSON.parse(output) as { summary: { violations: Violation[] } }).summary.violations;

@@ -29,16 +29,16 @@ export interface TestClub {
   adminId: string;
   adminToken: string;
   /** A person with these roles and a token for them. */
-  person(
+  person: (
     roles: readonly { role: string; squadId?: string }[],
     name?: string,
-  ): Promise<{ personId: string; token: string }>;
-  squad(name?: string, zone?: string): Promise<string>;
+  ) => Promise<{ personId: string; token: string }>;
+  squad: (name?: string, zone?: string) => Promise<string>;
   /** An athlete of the squad; with `login` also a person with the role athlete. */
-  athlete(
+  athlete: (
     squadId: string,
     options?: { name?: string; memberFrom?: string; sex?: string; login?: boolean },
-  ): Promise<{ athleteId: string; token?: string }>;
+  ) => Promise<{ athleteId: string; token?: string }>;
 }
 
 export interface TestApp {
@@ -46,9 +46,9 @@ export interface TestApp {
   app: NestFastifyApplication;
   clock: FixedClock;
   db: TestDatabase;
-  api(method: string, path: string, options?: ApiOptions): Promise<ApiAnswer>;
-  newClub(name?: string): Promise<TestClub>;
-  close(): Promise<void>;
+  api: (method: string, path: string, options?: ApiOptions) => Promise<ApiAnswer>;
+  newClub: (name?: string) => Promise<TestClub>;
+  close: () => Promise<void>;
 }
 
 /** The real API on a free port, against a database of its own. */

@@ -76,7 +76,8 @@ function holds(principal: Principal, action: Action, reach: Reach | 'club'): boo
 /** In sight: something of one's own, or in a squad one has a role in other than athlete. */
 function inSight(principal: Principal, reach: Reach): boolean {
   if (isOwn(principal, reach) || (reach.personId !== null && reach.personId === principal.personId)) return true;
-  if (reach.personId !== null && reach.squadIds.length === 0) return false;
+  const isPerson = reach.athleteId === null && reach.personId !== null;
+  if (isPerson) return false;
   return principal.roles.some(
     ({ role, squadId }) => role !== 'athlete' && (squadId === null || reach.squadIds.includes(squadId)),
   );

@@ -21,9 +21,8 @@ export class PeopleService {
     const id = newId(now);
     await this.people.insert({ id, name, email, createdAt: now });
     await this.audit.record('people.write', 'person', id);
-    const assigned: AssignedRole[] = [];
-    for (const role of roles) assigned.push(await this.addRole(id, role));
-    return { id, name, email, roles: assigned };
+    for (const role of roles) await this.addRole(id, role);
+    return this.person(id);
   }
 
   /** @throws {NotFoundError} */
