@@ -1,8 +1,8 @@
 import { Catch } from '@nestjs/common';
 import type { ArgumentsHost, ExceptionFilter } from '@nestjs/common';
 import { PinoLogger } from 'nestjs-pino';
-import { tell } from './problem.ts';
-import type { Problem, Told } from './problem.ts';
+import { pathOf, sendProblem, tell } from './problem.ts';
+import type { Told } from './problem.ts';
 import type { AppReply, AppRequest } from './request.types.ts';
 import { RouteTable } from './route-table.ts';
 
@@ -18,24 +18,8 @@ export class ProblemFilter implements ExceptionFilter {
     const request = host.switchToHttp().getRequest<AppRequest>();
     const reply = host.switchToHttp().getResponse<AppReply>();
     const told = this.methodNotAllowed(tell(error), request, reply);
-    const { code, title, status, detail, fields } = told;
-    const path = request.url.split('?', 1)[0]!;
     this.log(error, told, request.id);
-    if (reply.sent) return;
-    const problem: Problem = {
-      type: `urn:loadweir:problem:${code}`,
-      title,
-      status,
-      detail,
-      instance: path,
-      correlationId: request.id,
-      ...(fields === undefined ? {} : { errors: fields }),
-    };
-    if (status === 401) reply.header('www-authenticate', 'Bearer');
-    void reply
-      .status(status)
-      .header('content-type', 'application/problem+json; charset=utf-8')
-      .send(JSON.stringify(problem));
+    if (!reply.sent) sendProblem(request, reply, told);
   }
 
   private log(error: unknown, { level, code, status }: Told, correlationId: string): void {
@@ -46,7 +30,7 @@ export class ProblemFilter implements ExceptionFilter {
   /** A path that knows other methods: 405 and which. */
   private methodNotAllowed(told: Told, request: AppRequest, reply: AppReply): Told {
     if (told.status !== 404 || request.routeOptions.url !== undefined) return told;
-    const methods = this.routes.methodsOf(request.url.split('?', 1)[0]!);
+    const methods = this.routes.methodsOf(pathOf(request));
     if (methods.length === 0) return { ...told, detail: 'There is no such path.' };
     reply.header('allow', methods.join(', '));
     return {

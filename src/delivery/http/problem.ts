@@ -1,6 +1,7 @@
 import { HttpException } from '@nestjs/common';
 import { AppError } from '../../platform/errors.ts';
 import type { ErrorLevel, FieldError } from '../../platform/errors.ts';
+import type { AppReply, AppRequest } from './request.types.ts';
 
 /** A problem document (RFC 9457). */
 export interface Problem {
@@ -53,6 +54,30 @@ export function tell(error: unknown): Told {
   const known = status === undefined ? undefined : byStatus[status];
   if (status === undefined || known === undefined) return defect;
   return { ...known, status, level: status >= 500 ? 'error' : 'info' };
+}
+
+/** Sends what is told as a problem document. */
+export function sendProblem(request: AppRequest, reply: AppReply, { code, title, status, detail, fields }: Told): void {
+  const problem: Problem = {
+    type: `urn:loadweir:problem:${code}`,
+    title,
+    status,
+    detail,
+    instance: pathOf(request),
+    correlationId: request.id,
+    ...(fields === undefined ? {} : { errors: fields }),
+  };
+  if (status === 401) reply.header('www-authenticate', 'Bearer');
+  void reply
+    .status(status)
+    .header('content-type', 'application/problem+json; charset=utf-8')
+    .header('x-request-id', request.id)
+    .send(JSON.stringify(problem));
+}
+
+/** Without the query, which may hold anything. */
+export function pathOf({ url }: AppRequest): string {
+  return url.split('?', 1)[0]!;
 }
 
 /** The framework's own refusals carry a status; everything else below 400 or without one is a defect. */

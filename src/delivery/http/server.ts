@@ -5,6 +5,8 @@ import type { NestFastifyApplication } from '@nestjs/platform-fastify';
 import type { FastifyInstance } from 'fastify';
 import type { Clock } from '../../platform/clock.ts';
 import { newId } from '../../platform/ids.ts';
+import { sendProblem, tell } from './problem.ts';
+import type { AppReply, AppRequest } from './request.types.ts';
 import { RouteTable } from './route-table.ts';
 
 const jsonLimit = 1024 * 1024;
@@ -16,6 +18,8 @@ export function createAdapter(clock: Clock): FastifyAdapter {
   return new FastifyAdapter({
     bodyLimit: jsonLimit,
     requestTimeout: 60_000,
+    // A path that cannot be decoded is refused before any filter stands in the way.
+    frameworkErrors: (error: Error, request: AppRequest, reply: AppReply) => sendProblem(request, reply, tell(error)),
     genReqId: ({ headers }: IncomingMessage) => {
       const given = headers['x-request-id'];
       return typeof given === 'string' && givenId.test(given) ? given : newId(clock.now());
