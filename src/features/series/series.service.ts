@@ -9,8 +9,12 @@ import type { DayRecord } from '../days/days.types.ts';
 import { PoliciesService } from '../policies/policies.service.ts';
 import { SquadsService } from '../squads/squads.service.ts';
 import { buildSeries } from './build-series.ts';
+import type { SeriesQuery } from './series.schema.ts';
 import type { AthleteSeries, SeriesSettings, SquadWeek } from './series.types.ts';
 import { weekFigures } from './week-figures.ts';
+
+/** How far back an excerpt reaches where nothing else is asked for. */
+const EXCERPT_DAYS = 56;
 
 /** One athlete's days of the log with what is computed from them. */
 export interface AthleteLog {
@@ -80,6 +84,25 @@ export class SeriesService {
     return (await this.logs([athleteId], place.lastDay, settings, measure)).get(athleteId)?.series ?? null;
   }
 
+  /** One athlete's days between two days, the last closed one and the morning after it at most. */
+  async excerpt(athleteId: string, { from, to, measure }: SeriesQuery) {
+    const series = await this.ofAthlete(athleteId, measure);
+    const head = {
+      athleteId,
+      asOf: series?.lastDay ?? null,
+      firstDay: series?.firstDay ?? null,
+      measure: series?.measure ?? null,
+      measureReason: series?.measureReason ?? null,
+      ratioForm: series?.form ?? null,
+      standardDeviation: series?.sd ?? null,
+    };
+    if (series === null) return { ...head, items: [] };
+    const end = to ?? series.after.day;
+    const start = from ?? isoDay(dayNumber(end) - EXCERPT_DAYS);
+    const items = [...series.rows, series.after].filter(({ day }) => start <= day && day <= end);
+    return { ...head, items };
+  }
+
   /** The squad the athlete is in today and its last closed day; null without a squad or a closed day. */
   async placeOf(athleteId: string): Promise<{ squadId: string; lastDay: string } | null> {
     const now = this.clock.now();
@@ -129,7 +152,7 @@ export class SeriesService {
       day: asked,
       asOf: lastDay,
       readOn: lastDay === null ? null : isoDay(dayNumber(lastDay) + 1),
-      athletes: members.map(({ athleteId, name }) => {
+      items: members.map(({ athleteId, name }) => {
         const series = logs.get(athleteId)?.series;
         return {
           athleteId,

@@ -1,14 +1,11 @@
 import type { Basis, DayState, DomainMinutes, Measure } from '../../core/types.ts';
+import type { LoadPolicySettings, RatioForm } from '../policies/policies.types.ts';
 import type { AvailabilityState, Completeness, TrainingState } from '../days/days.types.ts';
 
-export type RatioForm = 'rolling-coupled' | 'rolling-uncoupled' | 'exponential';
+export type { RatioForm };
 
 /** What of a squad's policy decides how a series is read. */
-export interface SeriesSettings {
-  primaryMeasure: Measure;
-  ratio: { form: RatioForm; upper: number };
-  monotony: { sd: 'population' | 'sample'; upper: number };
-}
+export type SeriesSettings = Pick<LoadPolicySettings, 'primaryMeasure' | 'ratio' | 'monotony'>;
 
 /** Share of the covered minutes by what they were counted from, in percent. */
 export type BasisMix = Partial<Record<Basis, number>>;
@@ -124,6 +121,6 @@ export interface SquadWeek {
   /** The last closed training day not after the week; null: none is closed yet. */
   lastDay: string | null;
   closedDays: number;
-  policy: { id: string; validFrom: string; settings: SeriesSettings };
+  policy: { id: string; validFrom: string; settings: LoadPolicySettings };
   athletes: { athleteId: string; name: string; series: AthleteSeries | null; week: WeekFigures | null }[];
 }
