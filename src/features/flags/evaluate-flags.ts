@@ -63,6 +63,7 @@ function loadConcernEpisodes({ records, series, periods, runs, settings }: FlagI
         day,
         strongest: episode.strongest,
         parts,
+        ratioLimit: settings.ratio.upper,
         loadMeasure: series.measure,
         form: series.form,
       },

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { daySchema, idSchema } from '../../platform/schemas.ts';
 import { flagKinds } from './flags.types.ts';
 import type { FlagEvidence } from './flags.types.ts';
 
@@ -27,6 +28,7 @@ export const flagEvidence: z.ZodType<FlagEvidence> = z.discriminatedUnion('kind'
     day,
     strongest: loadMeasure,
     parts: z.array(loadPart),
+    ratioLimit: z.number(),
     loadMeasure: z.string(),
     form: z.string(),
   }),
@@ -67,3 +69,11 @@ export const flagAnswer = z.object({
   evidence: flagEvidence,
   asOf: day.optional(),
 });
+
+export const athleteFlagsParamsSchema = z.strictObject({ athleteId: idSchema });
+export const squadFlagsParamsSchema = z.strictObject({ squadId: idSchema });
+export const squadFlagsQuerySchema = z.strictObject({ day: daySchema.optional() });
+
+/** Every answer with flags says how they are meant. */
+export const athleteFlagsSchema = z.object({ cautions: z.array(z.string()), items: z.array(flagAnswer) });
+export const squadFlagsSchema = athleteFlagsSchema.extend({ asOf: z.string().nullable() });

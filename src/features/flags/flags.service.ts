@@ -5,7 +5,7 @@ import { SquadsService } from '../squads/squads.service.ts';
 import type { AthleteLog } from '../series/series.service.ts';
 import { evaluateFlags } from './evaluate-flags.ts';
 import { FlagRepository } from './flags.repository.ts';
-import type { AthleteFlag, FlagSettings, StoredFlag } from './flags.types.ts';
+import type { AthleteFlag, FlagSettings, StoredFlag, ThresholdUse } from './flags.types.ts';
 import { flagWords, NO_LONGER_SUPPORTED } from './sentences.ts';
 
 /** A squad's flags as of its last closed day; `written` counts the rows of the record that changed. */
@@ -25,8 +25,8 @@ export class FlagsService {
   ) {}
 
   /**
-   * Judges a squad's athletes on every day of their log up to the last closed day not after `until`. The record is
-   * brought up to date when that day is the squad's newest closed one; an earlier day is only looked at.
+   * Judges a squad's athletes on every day of their log up to the last closed day not after `until`. Whatever day is
+   * looked at, the record is brought up to the squad's newest closed one.
    */
   async evaluateSquad(squadId: string, until: string): Promise<SquadFlags> {
     const lastDay = await this.series.lastClosedDay(squadId, until);
@@ -36,8 +36,11 @@ export class FlagsService {
     const { settings } = await this.policies.policyOn(squadId, lastDay);
     const flags = await this.judge(squadId, await this.series.logs(ids, lastDay, settings), lastDay, settings);
     const newest = await this.series.lastClosedDay(squadId, await this.series.today(squadId));
-    const written = newest === lastDay ? await this.bringUpToDate(ids, flags, lastDay) : 0;
-    return { asOf: lastDay, flags, written };
+    if (newest !== null && newest > lastDay) {
+      const { written } = await this.evaluateSquad(squadId, newest);
+      return { asOf: lastDay, flags, written };
+    }
+    return { asOf: lastDay, flags, written: await this.bringUpToDate(ids, flags, lastDay) };
   }
 
   /** Flags of athletes whose logs are at hand, up to the day the logs end; writes nothing. */
@@ -62,6 +65,19 @@ export class FlagsService {
         runs: runs.filter((run) => run.athleteId === athleteId),
         thresholdUse: uses.filter((use) => use.athleteId === athleteId),
       }).map((episode) => ({ athleteId, squadId, ...episode, ...flagWords(episode) })),
+    );
+  }
+
+  /** Thresholds that came into use between two days: newer than any used before by that athlete in that modality. */
+  async thresholdChanges(athleteIds: readonly string[], from: string, until: string): Promise<ThresholdUse[]> {
+    const uses = await this.repository.thresholdUse(athleteIds, until);
+    const same = (a: ThresholdUse, b: ThresholdUse): boolean =>
+      a.athleteId === b.athleteId && a.modality === b.modality;
+    return uses.filter(
+      (use) =>
+        use.newest >= from &&
+        uses.some((earlier) => same(use, earlier) && earlier.newest < use.newest) &&
+        !uses.some((earlier) => same(use, earlier) && earlier.newest === use.newest && earlier.day < use.day),
     );
   }
 

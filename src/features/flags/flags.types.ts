@@ -1,4 +1,5 @@
 import type { SpikeClass } from '../../core/types.ts';
+import type { LoadPolicySettings } from '../policies/policies.types.ts';
 
 export const flagKinds = [
   'load-concern',
@@ -37,6 +38,8 @@ export type FlagEvidence =
       day: string;
       strongest: LoadPart['measure'];
       parts: LoadPart[];
+      /** The policy's limit of the ratio. */
+      ratioLimit: number;
       loadMeasure: string;
       form: string;
     }
@@ -110,9 +113,4 @@ export interface PlannedPeriod {
 }
 
 /** What of the policy decides on flags. */
-export interface FlagSettings {
-  ratio: { upper: number };
-  monotony: { upper: number };
-  chronicLowShare: number;
-  thresholdMaxAgeWeeks: number;
-}
+export type FlagSettings = Pick<LoadPolicySettings, 'ratio' | 'monotony' | 'chronicLowShare' | 'thresholdMaxAgeWeeks'>;

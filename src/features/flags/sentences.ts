@@ -72,17 +72,23 @@ function loadWords(
   const part = evidence.parts.find(({ measure }) => measure === evidence.strongest)!;
   const weeks = Math.floor((dayNumber(evidence.day) - dayNumber(episode.since)) / 7) + 1;
   const spell = weeks > 1 ? `${ordinal(weeks)} week: ` : '';
-  const { claim, ask, clears } = byMeasure(part, evidence.form);
+  const { claim, ask, clears } = byMeasure(part, evidence.form, evidence.ratioLimit);
   return { claim: capital(`${spell}${spell === '' ? claim : uncapital(claim)}`), ask, clears };
 }
 
-function byMeasure(part: LoadPart, form: string): Omit<FlagWords, 'sentence'> {
+function byMeasure(part: LoadPart, form: string, ratioLimit: number): Omit<FlagWords, 'sentence'> {
   switch (part.measure) {
     case 'ratio': {
-      const own = part.shortHistory === true ? 'the general limit (short history)' : 'the own upper end';
+      const limit = times2(part.limit);
+      const above =
+        part.shortHistory === true
+          ? `the general limit of ${limit} (short history)`
+          : part.limit > ratioLimit
+            ? `the own upper end of ${limit}`
+            : `${limit} and above the own upper end`;
       const base = form === 'rolling-uncoupled' ? 'the three weeks before it' : 'the last four weeks';
       return {
-        claim: `This week's daily load is ${times2(part.value)} times that of ${base}, above ${own} of ${times2(part.limit)}`,
+        claim: `This week's daily load is ${times2(part.value)} times that of ${base}, above ${above}`,
         ask: 'ask whether the jump was meant and how the sessions feel',
         clears: `Clears at ${times2(0.95 * part.limit)} or less on three days in a row.`,
       };
