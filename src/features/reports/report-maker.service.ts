@@ -14,5 +14,4 @@ export abstract class ReportMaker {
   abstract render(view: ReportView, edition: ReportEdition): Promise<RenderedReport>;
   /** Unrounded figures of a view, one entry an athlete. */
   abstract measures(view: ReportView): unknown[];
-  abstract filename(view: ReportView, version: number): string;
 }

@@ -8,11 +8,12 @@ import { AuditService } from '../access/audit.service.ts';
 import { SquadsService } from '../squads/squads.service.ts';
 import { ReportMaker } from './report-maker.service.ts';
 import { ReportRepository } from './reports.repository.ts';
-import type { ReportMeta, ReportView, StoredReport } from './reports.types.ts';
+import { reportFilename } from './report-filename.ts';
+import type { NamedReport, ReportMeta, ReportView, StoredReport } from './reports.types.ts';
 import { canonicalView, sha256 } from './view-hash.ts';
 
 export interface MadeReport {
-  report: ReportMeta;
+  report: NamedReport;
   /** False where the newest version says the same already. */
   created: boolean;
 }
@@ -43,7 +44,8 @@ export class ReportsService {
     const newest = await this.reports.newest(squadId, isoWeek);
     const { asOf, view } = await this.maker.view(squadId, isoWeek, await this.viewBefore(squadId, isoWeek));
     const viewHash = sha256(canonicalView(view));
-    if (newest !== null && newest.viewHash === viewHash) return { report: meta(newest), created: false };
+    if (newest !== null && newest.viewHash === viewHash)
+      return { report: await this.named(meta(newest)), created: false };
     const version = (newest?.version ?? 0) + 1;
     const change = newest === null ? null : this.change(newest.view, view, options.change);
     const { workbook, mail } = await this.maker.render(view, { version, change });
@@ -63,7 +65,7 @@ export class ReportsService {
     };
     await this.reports.insert({ ...report, workbook, mail });
     await this.audit.record('reports.write', 'report', report.id, { squadId, isoWeek, version });
-    return { report: meta(report), created: true };
+    return { report: await this.named(meta(report)), created: true };
   }
 
   /** What `make` would say now, without writing anything. */
@@ -75,15 +77,17 @@ export class ReportsService {
     return { view, unchanged, version: (newest?.version ?? 0) + (unchanged ? 0 : 1) };
   }
 
-  async list(squadId: string): Promise<ReportMeta[]> {
-    return this.reports.list(squadId);
+  async list(squadId: string): Promise<NamedReport[]> {
+    const { name } = await this.squads.squad(squadId);
+    const reports = await this.reports.list(squadId);
+    return reports.map((report) => ({ ...report, filename: reportFilename(name, report.isoWeek, report.version) }));
   }
 
   /** @throws {NotFoundError} */
-  async report(reportId: string): Promise<StoredReport> {
+  async report(reportId: string): Promise<NamedReport<StoredReport>> {
     const report = await this.reports.find(reportId);
     if (report === null) throw new NotFoundError();
-    return report;
+    return this.named(report);
   }
 
   /** @throws {NotFoundError} */
@@ -91,7 +95,7 @@ export class ReportsService {
     const report = await this.report(reportId);
     const content = await this.reports.workbook(reportId);
     if (content === null) throw new NotFoundError();
-    return { filename: this.maker.filename(report.view, report.version), content, hash: report.workbookHash };
+    return { filename: report.filename, content, hash: report.workbookHash };
   }
 
   /** Unrounded figures of the newest report of a week, one entry an athlete. @throws {NotFoundError} */
@@ -99,6 +103,11 @@ export class ReportsService {
     const newest = await this.reports.newest(squadId, isoWeek);
     if (newest === null) throw new NotFoundError();
     return this.maker.measures(newest.view);
+  }
+
+  private async named<Report extends ReportMeta>(report: Report): Promise<NamedReport<Report>> {
+    const { name } = await this.squads.squad(report.squadId);
+    return { ...report, filename: reportFilename(name, report.isoWeek, report.version) };
   }
 
   private change(before: ReportView, after: ReportView, given: string | undefined): string {

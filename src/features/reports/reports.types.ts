@@ -34,6 +34,9 @@ export interface ReportMeta {
   madeAt: string;
 }
 
+/** With the name of its workbook, which follows the squad's name. */
+export type NamedReport<Report extends ReportMeta = ReportMeta> = Report & { filename: string };
+
 export interface StoredReport extends ReportMeta {
   view: ReportView;
 }
