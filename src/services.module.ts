@@ -3,22 +3,30 @@ import type { DynamicModule } from '@nestjs/common';
 import { AccessModule } from './features/access/access.module.ts';
 import { AthletesModule } from './features/athletes/athletes.module.ts';
 import { ClubsModule } from './features/clubs/clubs.module.ts';
+import { FlagsModule } from './features/flags/flags.module.ts';
 import { JobRecordsModule } from './features/jobs/jobs.module.ts';
 import { PeopleModule } from './features/people/people.module.ts';
 import { PoliciesModule } from './features/policies/policies.module.ts';
+import { ReportsModule } from './features/reports/reports.module.ts';
+import { SeriesModule } from './features/series/series.module.ts';
 import { SquadsModule } from './features/squads/squads.module.ts';
 import { PersistenceModule } from './persistence/persistence.module.ts';
 import { Clock } from './platform/clock.ts';
 import type { Env } from './platform/env.ts';
+import { createMailTransport } from './platform/mail/create-mail-transport.ts';
+import { MailTransport } from './platform/mail/mail-transport.ts';
 import { ENV } from './platform/tokens.ts';
 
 const features = [
   AccessModule,
   AthletesModule,
   ClubsModule,
+  FlagsModule,
   JobRecordsModule,
   PeopleModule,
   PoliciesModule,
+  ReportsModule,
+  SeriesModule,
   SquadsModule,
 ];
 
@@ -33,8 +41,9 @@ export class ServicesModule {
       providers: [
         { provide: ENV, useValue: env },
         { provide: Clock, useValue: clock },
+        { provide: MailTransport, useFactory: () => createMailTransport(env) },
       ],
-      exports: [ENV, Clock, ...features],
+      exports: [ENV, Clock, MailTransport, ...features],
     };
   }
 }

@@ -7,8 +7,10 @@ import { TokensRepository } from '../features/access/tokens.repository.ts';
 import { AthletesRepository } from '../features/athletes/athletes.repository.ts';
 import { ClubsRepository } from '../features/clubs/clubs.repository.ts';
 import { JobRecordRepository } from '../features/jobs/job-record.repository.ts';
+import { FlagRepository } from '../features/flags/flags.repository.ts';
 import { PeopleRepository } from '../features/people/people.repository.ts';
 import { PoliciesRepository } from '../features/policies/policies.repository.ts';
+import { ReportRepository } from '../features/reports/reports.repository.ts';
 import { SquadsRepository } from '../features/squads/squads.repository.ts';
 import { databaseAppUrl } from '../platform/database-url.ts';
 import type { Env } from '../platform/env.ts';
@@ -20,11 +22,13 @@ import { PrismaAccessRepository } from './prisma-access.repository.ts';
 import { PrismaAthletesRepository } from './prisma-athletes.repository.ts';
 import { PrismaAuditRepository } from './prisma-audit.repository.ts';
 import { PrismaClubsRepository } from './prisma-clubs.repository.ts';
+import { PrismaFlagRepository } from './prisma-flag.repository.ts';
 import { PrismaIdempotencyRepository } from './prisma-idempotency.repository.ts';
 import { PrismaJobRecordRepository } from './prisma-job-record.repository.ts';
 import { PrismaPeopleRepository } from './prisma-people.repository.ts';
 import { PrismaPoliciesRepository } from './prisma-policies.repository.ts';
 import { PrismaReadiness } from './prisma-readiness.ts';
+import { PrismaReportRepository } from './prisma-report.repository.ts';
 import { PrismaSquadsRepository } from './prisma-squads.repository.ts';
 import { PrismaTokensRepository } from './prisma-tokens.repository.ts';
 import { PrismaUnitOfWork } from './prisma-unit-of-work.ts';
@@ -38,10 +42,12 @@ const ports: Provider[] = [
   { provide: AthletesRepository, useClass: PrismaAthletesRepository },
   { provide: AuditRepository, useClass: PrismaAuditRepository },
   { provide: ClubsRepository, useClass: PrismaClubsRepository },
+  { provide: FlagRepository, useClass: PrismaFlagRepository },
   { provide: IdempotencyRepository, useClass: PrismaIdempotencyRepository },
   { provide: JobRecordRepository, useClass: PrismaJobRecordRepository },
   { provide: PeopleRepository, useClass: PrismaPeopleRepository },
   { provide: PoliciesRepository, useClass: PrismaPoliciesRepository },
+  { provide: ReportRepository, useClass: PrismaReportRepository },
   { provide: SquadsRepository, useClass: PrismaSquadsRepository },
   { provide: TokensRepository, useClass: PrismaTokensRepository },
 ];

@@ -3,14 +3,17 @@ import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE, DiscoveryModule } from '@nestjs/
 import { AccessRules } from './access-rules.ts';
 import { AthletesController } from './athletes.controller.ts';
 import { ClubsController } from './clubs.controller.ts';
+import { FlagsController } from './flags.controller.ts';
 import { HealthController } from './health.controller.ts';
 import { JobRunsController } from './job-runs.controller.ts';
 import { MeController } from './me.controller.ts';
 import { PeopleController } from './people.controller.ts';
 import { PoliciesController } from './policies.controller.ts';
 import { ProblemFilter } from './problem.filter.ts';
+import { ReportsController } from './reports.controller.ts';
 import { RequestInterceptor } from './request.interceptor.ts';
 import { RouteTable } from './route-table.ts';
+import { SeriesController } from './series.controller.ts';
 import { SquadsController } from './squads.controller.ts';
 import { TokensController } from './tokens.controller.ts';
 import { ZodPipe } from './zod.pipe.ts';
@@ -20,11 +23,14 @@ import { ZodPipe } from './zod.pipe.ts';
   controllers: [
     AthletesController,
     ClubsController,
+    FlagsController,
     HealthController,
     JobRunsController,
     MeController,
     PeopleController,
     PoliciesController,
+    ReportsController,
+    SeriesController,
     SquadsController,
     TokensController,
   ],
