@@ -26,10 +26,14 @@ export async function exportsOf(api: ApiClient, scenario: Scenario, club: FoundC
   for (const { key } of scenario.athletes) {
     const path = `/v1/athletes/${club.athleteIds.get(key)!}`;
     const range = `from=${scenario.firstDay}&to=${scenario.lastSunday}`;
-    const series = await api.get<{ rows: Omit<DayState, 'athlete'>[] }>(`${path}/series?${range}`, token);
+    const series = await api.get<{ items: (Omit<DayState, 'athlete'> | { day: string })[] }>(
+      `${path}/series?${range}`,
+      token,
+    );
     days.push(
-      ...series.rows
-        .filter(({ day }) => day <= scenario.lastSunday)
+      // The last item is the morning after the last day and has no state of its own.
+      ...series.items
+        .filter((item) => 'training' in item)
         .map(({ day, training, availability, completeness }) => ({
           ...{ athlete: key, day, training, availability, completeness },
         })),

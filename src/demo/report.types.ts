@@ -6,6 +6,7 @@ export interface ReportAnswer {
   version: number;
   asOf: string;
   madeAt: string;
+  files: { name: string }[];
   view: ReportView;
 }
 

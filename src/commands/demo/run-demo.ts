@@ -62,7 +62,7 @@ interface ToWrite {
 async function writeFiles(args: DemoArguments, { api, env, scenario, club, made, today }: ToWrite): Promise<string[]> {
   const folder = resolve(args.out ?? env.OUTBOX_DIR);
   const shown = (file: string) => (args.exit ? relative(folder, file) : relative(process.cwd(), file));
-  const workbook = join(folder, `squad-week-${scenario.isoWeek}-scenario-${scenario.number}.xlsx`);
+  const workbook = join(folder, workbookName(made, scenario.number));
   writeWhole(workbook, made.workbook);
   const mails = made.deliveries.flatMap(({ detail }) => (detail?.endsWith('.eml') === true ? [detail] : []));
   const files = [workbook, ...mails].map(shown);
@@ -73,4 +73,10 @@ async function writeFiles(args: DemoArguments, { api, env, scenario, club, made,
   const summary = summaryOf(scenario, club, made.report, today, files);
   writeWhole(join(folder, 'summary.json'), `${JSON.stringify(summary, null, 2)}\n`);
   return files;
+}
+
+/** The name the service gave it; the squads of other scenarios are called the same. */
+function workbookName({ report }: MadeReport, scenario: number): string {
+  const name = report.files[0]!.name;
+  return scenario === 1 ? name : name.replace(/\.xlsx$/, `-scenario-${scenario}.xlsx`);
 }
