@@ -13,7 +13,7 @@ export interface RunningApi {
   url: string;
   app: NestFastifyApplication;
   /** Lets requests under way be answered, then closes. */
-  close(): Promise<void>;
+  close: () => Promise<void>;
 }
 
 /** The API, ready to listen. */
