@@ -113,6 +113,9 @@ export const importQuerySchema = z.strictObject({
   dryRun: z.enum(['true', 'false']).default('false'),
 });
 
+/** The sheet itself, as text. */
+export const sheetTextSchema = z.string({ error: 'a sheet as text/csv' });
+
 const minutesSchema = z.object({ moderate: z.number(), heavy: z.number(), severe: z.number(), extreme: z.number() });
 
 /** JSON columns of a weight, checked on reading. */
