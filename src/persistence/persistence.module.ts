@@ -5,13 +5,19 @@ import { AuditRepository } from '../features/access/audit.repository.ts';
 import { IdempotencyRepository } from '../features/access/idempotency.repository.ts';
 import { TokensRepository } from '../features/access/tokens.repository.ts';
 import { AthletesRepository } from '../features/athletes/athletes.repository.ts';
+import { AvailabilityRepository } from '../features/availability/availability.repository.ts';
 import { ClubsRepository } from '../features/clubs/clubs.repository.ts';
+import { DaysRepository } from '../features/days/days.repository.ts';
 import { JobRecordRepository } from '../features/jobs/job-record.repository.ts';
 import { FlagRepository } from '../features/flags/flags.repository.ts';
 import { PeopleRepository } from '../features/people/people.repository.ts';
+import { PeriodsRepository } from '../features/periods/periods.repository.ts';
 import { PoliciesRepository } from '../features/policies/policies.repository.ts';
 import { ReportRepository } from '../features/reports/reports.repository.ts';
+import { ReweighRepository } from '../features/sessions/reweigh.repository.ts';
+import { SessionsRepository } from '../features/sessions/sessions.repository.ts';
 import { SquadsRepository } from '../features/squads/squads.repository.ts';
+import { ThresholdsRepository } from '../features/thresholds/thresholds.repository.ts';
 import { databaseAppUrl } from '../platform/database-url.ts';
 import type { Env } from '../platform/env.ts';
 import { JobQueue } from '../platform/job-queue.ts';
@@ -21,15 +27,21 @@ import { BossJobQueue } from './boss-job-queue.ts';
 import { PrismaAccessRepository } from './prisma-access.repository.ts';
 import { PrismaAthletesRepository } from './prisma-athletes.repository.ts';
 import { PrismaAuditRepository } from './prisma-audit.repository.ts';
+import { PrismaAvailabilityRepository } from './prisma-availability.repository.ts';
 import { PrismaClubsRepository } from './prisma-clubs.repository.ts';
+import { PrismaDayRepository } from './prisma-day.repository.ts';
 import { PrismaFlagRepository } from './prisma-flag.repository.ts';
 import { PrismaIdempotencyRepository } from './prisma-idempotency.repository.ts';
 import { PrismaJobRecordRepository } from './prisma-job-record.repository.ts';
 import { PrismaPeopleRepository } from './prisma-people.repository.ts';
+import { PrismaPeriodRepository } from './prisma-period.repository.ts';
 import { PrismaPoliciesRepository } from './prisma-policies.repository.ts';
 import { PrismaReadiness } from './prisma-readiness.ts';
 import { PrismaReportRepository } from './prisma-report.repository.ts';
+import { PrismaReweighRepository } from './prisma-reweigh.repository.ts';
+import { PrismaSessionRepository } from './prisma-session.repository.ts';
 import { PrismaSquadsRepository } from './prisma-squads.repository.ts';
+import { PrismaThresholdRepository } from './prisma-threshold.repository.ts';
 import { PrismaTokensRepository } from './prisma-tokens.repository.ts';
 import { PrismaUnitOfWork } from './prisma-unit-of-work.ts';
 import { PrismaService } from './prisma.service.ts';
@@ -41,14 +53,20 @@ const ports: Provider[] = [
   { provide: AccessRepository, useClass: PrismaAccessRepository },
   { provide: AthletesRepository, useClass: PrismaAthletesRepository },
   { provide: AuditRepository, useClass: PrismaAuditRepository },
+  { provide: AvailabilityRepository, useClass: PrismaAvailabilityRepository },
   { provide: ClubsRepository, useClass: PrismaClubsRepository },
+  { provide: DaysRepository, useClass: PrismaDayRepository },
   { provide: FlagRepository, useClass: PrismaFlagRepository },
   { provide: IdempotencyRepository, useClass: PrismaIdempotencyRepository },
   { provide: JobRecordRepository, useClass: PrismaJobRecordRepository },
   { provide: PeopleRepository, useClass: PrismaPeopleRepository },
+  { provide: PeriodsRepository, useClass: PrismaPeriodRepository },
   { provide: PoliciesRepository, useClass: PrismaPoliciesRepository },
   { provide: ReportRepository, useClass: PrismaReportRepository },
+  { provide: ReweighRepository, useClass: PrismaReweighRepository },
+  { provide: SessionsRepository, useClass: PrismaSessionRepository },
   { provide: SquadsRepository, useClass: PrismaSquadsRepository },
+  { provide: ThresholdsRepository, useClass: PrismaThresholdRepository },
   { provide: TokensRepository, useClass: PrismaTokensRepository },
 ];
 

@@ -2,19 +2,26 @@ import { Module } from '@nestjs/common';
 import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE, DiscoveryModule } from '@nestjs/core';
 import { AccessRules } from './access-rules.ts';
 import { AthletesController } from './athletes.controller.ts';
+import { AvailabilityController } from './availability.controller.ts';
 import { ClubsController } from './clubs.controller.ts';
+import { DaysController } from './days.controller.ts';
 import { FlagsController } from './flags.controller.ts';
 import { HealthController } from './health.controller.ts';
 import { JobRunsController } from './job-runs.controller.ts';
 import { MeController } from './me.controller.ts';
 import { PeopleController } from './people.controller.ts';
+import { PeriodsController } from './periods.controller.ts';
 import { PoliciesController } from './policies.controller.ts';
 import { ProblemFilter } from './problem.filter.ts';
 import { ReportsController } from './reports.controller.ts';
 import { RequestInterceptor } from './request.interceptor.ts';
+import { ReweighingsController } from './reweighings.controller.ts';
 import { RouteTable } from './route-table.ts';
 import { SeriesController } from './series.controller.ts';
+import { SessionImportsController } from './session-imports.controller.ts';
+import { SessionsController } from './sessions.controller.ts';
 import { SquadsController } from './squads.controller.ts';
+import { ThresholdsController } from './thresholds.controller.ts';
 import { TokensController } from './tokens.controller.ts';
 import { ZodPipe } from './zod.pipe.ts';
 
@@ -22,16 +29,23 @@ import { ZodPipe } from './zod.pipe.ts';
   imports: [DiscoveryModule],
   controllers: [
     AthletesController,
+    AvailabilityController,
     ClubsController,
+    DaysController,
     FlagsController,
     HealthController,
     JobRunsController,
     MeController,
     PeopleController,
+    PeriodsController,
     PoliciesController,
     ReportsController,
+    ReweighingsController,
     SeriesController,
+    SessionImportsController,
+    SessionsController,
     SquadsController,
+    ThresholdsController,
     TokensController,
   ],
   providers: [
