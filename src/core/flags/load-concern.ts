@@ -22,7 +22,7 @@ import { spikeConcern } from './spike-concern.ts';
  * @remarks Equation: union of the measures' stretches. A day sees only data up to it. Strongest: largest value ÷ limit (low chronic load:
  * limit ÷ value; monotony: smaller quotient of monotony and strain; spike: distance over allowed distance).
  * Limits: a screen, not a diagnosis; load figures describe training and foretell no injury.
- * @see limits and sources at each measure; one piece of evidence: own convention, after Impellizzeri FM et al. 2021, Sports Med 51:581–592, doi 10.1007/s40279-020-01378-6
+ * @see Gabbett TJ 2016, Foster C 1998 and Frandsen JSB et al. 2025 at the measures; one piece of evidence: own convention, after Impellizzeri FM et al. 2021, Sports Med 51:581–592, doi 10.1007/s40279-020-01378-6
  * @example
  * loadConcern({ firstDay: 0, days: [1.2, 1.6].map((ratio, day) => ({ day, ratio, chronic: 50, monotony: 1, strain: 400, muted: null, spike: null })) }).map((e) => e.strongest); // => ['ratio']
  */

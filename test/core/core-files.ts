@@ -1,0 +1,59 @@
+import { readdirSync, readFileSync } from 'node:fs';
+
+const root = new URL('../../src/core/', import.meta.url);
+
+/** One documented export of the core. */
+export interface DocBlock {
+  readonly file: string;
+  readonly name: string;
+  readonly text: string;
+}
+
+/** All files of the core, relative to it. */
+export function coreFiles(): string[] {
+  return readdirSync(root, { recursive: true, encoding: 'utf8' })
+    .filter((name) => name.endsWith('.ts'))
+    .sort();
+}
+
+export function coreSource(file: string): string {
+  return readFileSync(new URL(file, root), 'utf8');
+}
+
+/** Everything a file of the core exports. */
+export async function coreExports(file: string): Promise<Record<string, unknown>> {
+  return (await import(new URL(file, root).href)) as Record<string, unknown>;
+}
+
+/** The doc blocks that stand before an exported function. */
+export function docBlocks(file: string): DocBlock[] {
+  const found = coreSource(file).matchAll(/\/\*\*((?:(?!\*\/)[\s\S])*)\*\/\s*export function (\w+)/g);
+  return [...found].map((match) => ({
+    file,
+    name: match[2]!,
+    text: match[1]!.replace(/^ *\* ?/gm, '').trim(),
+  }));
+}
+
+/** Folders that hold methods; helpers among their files are named here, with why they are none. */
+export const HELPERS: Readonly<Record<string, string>> = {
+  'series/day.ts': 'calendar arithmetic',
+  'ratio/windows.ts': 'checks of options',
+  'response/check-gains.ts': 'checks of parameters',
+  'flags/types.ts': 'types',
+  'flags/constituent.ts': 'the fold the measures share',
+  'flags/load-concern-settings.ts': 'checks of settings',
+};
+
+/** Functions that are part of another method and stand in no table. */
+export const PARTS: readonly string[] = [
+  'checkBounds',
+  'ratioConcern',
+  'chronicLowConcern',
+  'monotonyStrainConcern',
+  'spikeConcern',
+];
+
+export function methodFiles(): string[] {
+  return coreFiles().filter((file) => file.includes('/') && !file.startsWith('catalogue/') && !(file in HELPERS));
+}
