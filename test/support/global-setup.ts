@@ -21,13 +21,17 @@ export function needsDatabase(patterns: readonly string[]): boolean {
   return patterns.length === 0 || !patterns.every((pattern) => /(^|\/)test\/(core|architecture)(\/|$)/.test(pattern));
 }
 
-/** One server and one migrated template database for the whole run; test files clone the template. */
+/**
+ * One server and one migrated template database for the whole run; test files clone the template. The server is a
+ * throw-away one, or the one in DATABASE_URL, with a superuser's connection: tests make databases and powerful roles.
+ */
 export default async function globalSetup(config: { testPathPatterns?: { patterns: string[] } }): Promise<void> {
   if (!needsDatabase(config.testPathPatterns?.patterns ?? [])) return;
   const { url, stop } = process.env.DATABASE_URL
     ? { url: process.env.DATABASE_URL, stop: async () => undefined }
     : await startThrowAway();
   try {
+    await requireSuperuser(url);
     const template = `loadweir_template_${randomBytes(4).toString('hex')}`;
     await execute(url, `create database ${template}`);
     const ownerUrl = onDatabase(url, template);
@@ -44,6 +48,13 @@ export default async function globalSetup(config: { testPathPatterns?: { pattern
     await stop();
     throw error;
   }
+}
+
+async function requireSuperuser(url: string): Promise<void> {
+  const sql = 'select 1 / rolsuper::int from pg_roles where rolname = current_user';
+  await execute(url, sql).catch((cause: unknown) => {
+    throw new Error('Tests need a superuser of the server in DATABASE_URL.', { cause });
+  });
 }
 
 async function startThrowAway() {
