@@ -1,4 +1,4 @@
-import { Body, Controller, Get, Optional, Param, Post } from '@nestjs/common';
+import { Body, Controller, Get, Param, Post } from '@nestjs/common';
 import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
 import { PolicyChangeListener } from '../../features/policies/policy-change.ts';
 import {
@@ -18,7 +18,7 @@ import { Answer } from './answer.decorator.ts';
 export class PoliciesController {
   constructor(
     private readonly policies: PoliciesService,
-    @Optional() private readonly listener: PolicyChangeListener | null,
+    private readonly listener: PolicyChangeListener,
   ) {}
 
   /** Settings that are not named stay as they were. Other weights or another bound weigh later sessions anew. */
@@ -30,7 +30,7 @@ export class PoliciesController {
     @Body({ schema: policyInputSchema }) input: PolicyInput,
   ) {
     const { policy, reweigh } = await this.policies.add(squadId, input);
-    if (!reweigh || this.listener === null) return policy;
+    if (!reweigh) return policy;
     return { ...policy, reweighed: await this.listener.policyChanged(squadId, policy.validFrom) };
   }
 
