@@ -54,7 +54,7 @@ export function daysOf(athlete: string, log: Row[], thresholds: Row[], policy: P
     const minutes = [0, 0, 0, 0];
     for (const one of weighed) {
       if (one.minutes === null || !one.applies) continue;
-      counted[one.basis] = (counted[one.basis] ?? 0) + Number(one.session.durationMin);
+      counted[one.basis] = (counted[one.basis] ?? 0) + one.minutes.reduce((sum, value) => sum + value, 0);
       one.minutes.forEach((value, domain) => (minutes[domain]! += value));
     }
     days.push({
