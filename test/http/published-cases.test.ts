@@ -9,6 +9,24 @@ import type { AthleteTable } from '../support/workbook.ts';
 // The week is 2026-W09, Monday 23 February to Sunday 1 March; the clock stands on the Monday after it.
 const WEEK = ['2026-02-23', '2026-02-24', '2026-02-25', '2026-02-26', '2026-02-27', '2026-02-28', '2026-03-01'];
 
+interface Item {
+  day: string;
+  rating: { value: number };
+  /** Not in the last item, the morning after the log. */
+  domain?: { value: number };
+  monotony: number;
+  strain: number;
+  longLoad: { units: number };
+  shortLoad: { units: number };
+}
+interface Series {
+  items: Item[];
+  measure: string;
+  standardDeviation: string;
+  firstDay: string;
+  asOf: string;
+}
+
 let app: TestApp;
 let club: TestClub;
 let manager: string;
@@ -20,10 +38,10 @@ beforeAll(async () => {
 });
 afterAll(() => app.close());
 
-async function post(path: string, body: unknown, status = 201) {
+async function post(path: string, body: unknown, status = 201): Promise<{ id: string }> {
   const answer = await app.api('POST', path, { token: manager, body });
   expect({ path, status: answer.status, body: answer.body }).toMatchObject({ path, status });
-  return answer.body;
+  return answer.body as { id: string };
 }
 
 /** A squad with one athlete, whose sessions are logged and whose days are closed. */
@@ -41,10 +59,10 @@ async function logged(
   return { squadId, athleteId };
 }
 
-async function seriesOf(athleteId: string): Promise<Record<string, any>> {
+async function seriesOf(athleteId: string): Promise<Series> {
   const answer = await app.api('GET', `/v1/athletes/${athleteId}/series?from=2026-02-01`, { token: manager });
   expect(answer.status).toBe(200);
-  return answer.body;
+  return answer.body as Series;
 }
 
 async function measuresOf(squadId: string): Promise<AthleteTable> {
@@ -91,11 +109,9 @@ describe('Foster C et al. 2001, J Strength Cond Res 15(1):109–115, table 5: ni
     const { squadId, athleteId } = await logged('Foster Population', sessions, WEEK);
     const { items, measure, standardDeviation } = await seriesOf(athleteId);
     expect({ measure, standardDeviation }).toEqual({ measure: 'rating-load', standardDeviation: 'population' });
-    const week_ = items.filter(({ day }: { day: string }) => WEEK.includes(day));
-    expect(week_.map(({ rating }: { rating: { value: number } }) => rating.value)).toEqual([
-      900, 50, 1120, 180, 600, 50, 880,
-    ]);
-    const sunday = week_.at(-1);
+    const week_ = items.filter(({ day }) => WEEK.includes(day));
+    expect(week_.map(({ rating }) => rating.value)).toEqual([900, 50, 1120, 180, 600, 50, 880]);
+    const sunday = week_.at(-1)!;
     expect(sunday.monotony).toBeCloseTo(1.3069, 4);
     expect(sunday.strain).toBeCloseTo(3780 * sunday.monotony, 6);
     const cells = await measuresOf(squadId);
@@ -109,7 +125,7 @@ describe('Foster C et al. 2001, J Strength Cond Res 15(1):109–115, table 5: ni
     const { squadId, athleteId } = await logged('Foster Sample', sessions, WEEK, {
       monotony: { sd: 'sample', upper: 2 },
     });
-    const sunday = (await seriesOf(athleteId)).items.find(({ day }: { day: string }) => day === '2026-03-01');
+    const sunday = (await seriesOf(athleteId)).items.find(({ day }) => day === '2026-03-01')!;
     expect(sunday.monotony).toBeCloseTo(1.21, 4);
     expect((await measuresOf(squadId)).value('Foster Sample', 'Monotony')).toBe(sunday.monotony);
   });
@@ -129,7 +145,7 @@ test('Lucía A et al. 1999, Int J Sports Med 20(3):167–172: about 71, 23 and 8
   }));
   const { squadId, athleteId } = await logged('Lucia Stages', sessions, days);
   const { items } = await seriesOf(athleteId);
-  const loads: number[] = items.flatMap(({ domain }: { domain?: { value: number } }) => domain?.value ?? []);
+  const loads: number[] = items.flatMap(({ domain }) => domain?.value ?? []);
   expect(loads).toHaveLength(22);
   expect(loads.reduce((sum, load) => sum + load, 0)).toBeCloseTo(8460, 8);
   const cells = await measuresOf(squadId);
@@ -145,11 +161,11 @@ test('impulse response, exact: 100, 0, 50, 0, 200 on days 1 to 5 leave 331.8639 
   const { squadId, athleteId } = await logged('Impulse Days', sessions, days);
   const { items, firstDay, asOf } = await seriesOf(athleteId);
   expect({ firstDay, asOf }).toEqual({ firstDay: days[0], asOf: days[4] });
-  const morning = items.at(-1);
+  const morning = items.at(-1)!;
   expect(morning.day).toBe('2026-03-02');
   expect(morning.longLoad.units).toBeCloseTo(331.86385543, 7);
   expect(morning.shortLoad.units).toBeCloseTo(299.69106572, 7);
-  expect(items.map(({ longLoad }: { longLoad: { units: number } }) => longLoad.units).slice(1)).toEqual(
+  expect(items.map(({ longLoad }) => longLoad.units).slice(1)).toEqual(
     [97.80228725, 95.65287391, 142.45184213, 139.32115983, 331.86385543].map((value) => expect.closeTo(value, 7)),
   );
   const cells = await measuresOf(squadId);

@@ -34,7 +34,7 @@ const headRow = (of: ExcelJS.Worksheet): number => {
 };
 const column = (of: ExcelJS.Worksheet, title: RegExp): number => {
   const row = of.getRow(headRow(of));
-  for (let at = 1; at <= of.columnCount; at += 1) if (title.test(String(row.getCell(at).value))) return at;
+  for (let at = 1; at <= of.columnCount; at += 1) if (title.test(row.getCell(at).text)) return at;
   throw new Error(`no column ${title.source}`);
 };
 
@@ -145,7 +145,7 @@ test('the same view and edition give the same bytes; another version says what c
 
 test('the sheet Method prints policy, sources and own conventions, and how missing days are treated', () => {
   const words: string[] = [];
-  sheet('Method').eachRow((row) => row.eachCell((cell) => words.push(String(cell.value))));
+  sheet('Method').eachRow((row) => row.eachCell((cell) => words.push(cell.text)));
   const all = words.join('\n');
   for (const part of [
     'population standard deviation',

@@ -22,7 +22,7 @@ export async function readWorkbook(
     const cell = (athlete: string, head: string) => {
       const headRow = rowOf(sheet, 'Athlete', 1);
       for (let column = 1; column <= sheet.columnCount; column += 1) {
-        if (!String(sheet.getCell(headRow, column).value).startsWith(head)) continue;
+        if (!sheet.getCell(headRow, column).text.startsWith(head)) continue;
         return sheet.getCell(rowOf(sheet, athlete, headRow), column);
       }
       throw new Error(`no column ${head}`);
