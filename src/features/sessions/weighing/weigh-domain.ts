@@ -100,7 +100,7 @@ function judged(
       : minutes.moderate + minutes.heavy + minutes.severe + minutes.extreme;
   const unassignedMin = withoutDomainMin + Math.max(0, durationMin - described);
   if (unassignedMin > MAX_UNASSIGNED_SHARE * durationMin + 1e-9) {
-    const share = Math.round((100 * unassignedMin) / durationMin);
+    const share = Math.ceil((100 * unassignedMin) / durationMin);
     return { state: 'absent', reason: `${share} % of the minutes have no domain (at most 10 %)`, unassignedMin };
   }
   return { state: 'present', load: domainLoad(minutes, policy.weights), minutes, unassignedMin };
