@@ -12,9 +12,9 @@ afterEach(async () => {
 });
 
 function folder(): string {
-  const { path, remove } = temporaryFolder();
-  cleanUp.push(remove);
-  return path;
+  const temporary = temporaryFolder();
+  cleanUp.push(() => temporary.remove());
+  return temporary.path;
 }
 
 function start(env: Record<string, string>): Command {

@@ -56,7 +56,7 @@ export function command(path: string, args: readonly string[], env: Record<strin
         await pause(25);
       }
     },
-    signal: (signal) => void process.kill(child.pid!, signal),
+    signal: (signal) => void child.kill(signal),
     finished,
   };
 }
