@@ -1,0 +1,259 @@
+import { afterAll, beforeAll, describe, expect, it } from '@jest/globals';
+import { ReweighRepository } from '../../src/features/sessions/reweigh.repository.ts';
+import { ReweighService } from '../../src/features/sessions/reweigh.service.ts';
+import { startTestApp } from '../support/app.ts';
+import type { TestApp, TestClub } from '../support/app.ts';
+import { rowsOf } from '../support/rows.ts';
+
+let test: TestApp;
+let club: TestClub;
+let squadId: string;
+let manager: string;
+
+beforeAll(async () => {
+  test = await startTestApp();
+  club = await test.newClub();
+  squadId = await club.squad('Mixed', 'Europe/Prague');
+  manager = (await club.person([{ role: 'manager', squadId }])).token;
+});
+afterAll(async () => test?.close());
+
+const api = (method: string, path: string, body?: object) => test.api(method, path, { token: manager, body });
+const enter = (athleteId: string, ...values: object[]) =>
+  api('POST', `/v1/athletes/${athleteId}/thresholds`, { values });
+const threshold = (quantity: string, modality: string, value: number, validFrom: string) => ({
+  ...{ quantity, modality, value, method: 'step test', validFrom },
+});
+const powerSession = (modality: string, day: string, powerW = 250) => ({
+  ...{ startedAt: `${day}T10:00:00Z`, durationMin: 60, modality, rating: 5 },
+  content: { kind: 'intervals', lines: [{ repetitions: 1, durationS: 3600, powerW }] },
+});
+const log = async (athleteId: string, body: object): Promise<string> => {
+  const answer = await api('POST', `/v1/athletes/${athleteId}/sessions`, body);
+  if (answer.status !== 201) throw new Error(JSON.stringify(answer.body));
+  return answer.body.id;
+};
+/** Every stored weight as the bytes the database would print. */
+const weights = async () => {
+  const rows = await rowsOf<{ id: string; bytes: string }>(
+    test.db.ownerUrl,
+    `select session_id as id, w::text as bytes from session_weight w order by 1`,
+  );
+  return new Map(rows.map(({ id, bytes }) => [id, bytes]));
+};
+const changedSince = async (before: Map<string, string>) =>
+  [...(await weights())].filter(([id, bytes]) => before.get(id) !== bytes).map(([id]) => id);
+const loadOf = async (id: string) => (await api('GET', `/v1/sessions/${id}`)).body.weight.domain.load;
+const totalOf = async (athleteId: string, day: string) =>
+  (
+    await rowsOf<{ domain_load: number }>(
+      test.db.ownerUrl,
+      'select domain_load from daily_total where athlete_id = $1 and day = $2',
+      [athleteId, day],
+    )
+  )[0]?.domain_load;
+
+describe('three athletes, two modalities, three values each', () => {
+  const days = ['2026-01-05', '2026-01-15', '2026-01-25', '2026-02-05', '2026-02-15', '2026-02-25'];
+  const athletes: string[] = [];
+  /** sessions[athlete][modality][day] */
+  const sessions: Record<string, Record<string, Record<string, string>>> = {};
+
+  beforeAll(async () => {
+    for (const name of ['Ada', 'Bea', 'Cleo']) {
+      const { athleteId } = await club.athlete(squadId, { name });
+      athletes.push(athleteId);
+      sessions[athleteId] = {};
+      for (const modality of ['rowing', 'cycling']) {
+        await enter(
+          athleteId,
+          threshold('lt1-power', modality, 150, '2026-01-01'),
+          threshold('critical-power', modality, 240, '2026-01-01'),
+          threshold('critical-power', modality, 245, '2026-02-01'),
+          threshold('critical-power', modality, 260, '2026-02-20'),
+        );
+        const mine: Record<string, string> = {};
+        for (const day of days) mine[day] = await log(athleteId, powerSession(modality, day));
+        sessions[athleteId][modality] = mine;
+      }
+    }
+  });
+
+  it('a late value touches just the sessions of its athlete, modality and days', async () => {
+    const [ada] = athletes as [string];
+    const before = await weights();
+    const mine = sessions[ada]!.rowing!;
+    const expected = [mine['2026-01-15']!, mine['2026-01-25']!];
+    expect(await loadOf(expected[0]!)).toBe(180);
+    const answer = await enter(ada, threshold('critical-power', 'rowing', 255, '2026-01-10'));
+    expect(answer.body.reweighed).toEqual({ sessionIds: expected.toSorted(), task: null });
+    expect((await changedSince(before)).toSorted()).toEqual(expected.toSorted());
+    expect(await loadOf(expected[0]!)).toBe(120);
+    // The day holds 180 of cycling and now 120 of rowing; the day before the change is as it was.
+    expect(await totalOf(ada, '2026-01-15')).toBe(180 + 120);
+    expect(await totalOf(ada, '2026-01-05')).toBe(360);
+  });
+
+  it('a correction and a withdrawal touch the days of that value alone', async () => {
+    const [, bea] = athletes as [string, string];
+    const mine = sessions[bea]!.cycling!;
+    const history = await api('GET', `/v1/athletes/${bea}/thresholds?quantity=critical-power&modality=cycling`);
+    const middle = history.body.items.find(({ validFrom }: { validFrom: string }) => validFrom === '2026-02-01');
+    const touched = [mine['2026-02-05']!, mine['2026-02-15']!].toSorted();
+
+    let before = await weights();
+    const path = `/v1/athletes/${bea}/thresholds/${middle.id}/correction`;
+    const corrected = await api('POST', path, { value: 251, reason: 'typing error' });
+    expect(corrected.body.reweighed).toEqual({ sessionIds: touched, task: null });
+    expect((await changedSince(before)).toSorted()).toEqual(touched);
+    expect(await loadOf(touched[0]!)).toBe(120);
+
+    before = await weights();
+    const withdrawal = `/v1/athletes/${bea}/thresholds/${corrected.body.item.id}/withdrawal`;
+    const withdrawn = await api('POST', withdrawal, { reason: 'other athlete' });
+    expect(withdrawn.body.reweighed).toEqual({ sessionIds: touched, task: null });
+    expect((await changedSince(before)).toSorted()).toEqual(touched);
+    const weight = (await api('GET', `/v1/sessions/${touched[0]!}`)).body.weight;
+    expect(weight.thresholdsUsed).toContainEqual(expect.objectContaining({ quantity: 'critical-power', value: 240 }));
+    expect(await totalOf(bea, '2026-02-05')).toBe(360);
+  });
+
+  it('a quantity no session uses, and a value for another setting, touch none', async () => {
+    const [, , cleo] = athletes as [string, string, string];
+    const before = await weights();
+    const speed = await enter(cleo, threshold('lt1-speed', 'rowing', 3, '2026-01-01'), {
+      ...threshold('critical-power', 'rowing', 300, '2026-01-01'),
+      setting: 'water',
+    });
+    expect(speed.body.reweighed).toEqual({ sessionIds: [], task: null });
+    expect(await changedSince(before)).toEqual([]);
+  });
+
+  it('a policy with other weights weighs the squad’s sessions from its day on anew', async () => {
+    const before = await weights();
+    const weightsGiven = { moderate: 1, heavy: 2, severe: 4, extreme: 5 };
+    const body = { validFrom: '2026-02-20', settings: { weights: weightsGiven } };
+    const answer = await api('POST', `/v1/squads/${squadId}/policies`, body);
+    expect(answer.status).toBe(201);
+    // On 2026-02-25 critical power is 260: 250 W are heavy, which still weighs 2.
+    expect(answer.body.reweighed).toEqual({ sessionIds: [], task: null });
+    expect(await changedSince(before)).toEqual([]);
+    const second = { validFrom: '2026-02-21', settings: { weights: { ...weightsGiven, heavy: 3 } } };
+    const reweighed = (await api('POST', `/v1/squads/${squadId}/policies`, second)).body.reweighed;
+    const expected = athletes.flatMap((id) => ['rowing', 'cycling'].map((name) => sessions[id]![name]!['2026-02-25']!));
+    expect(reweighed).toEqual({ sessionIds: expected.toSorted(), task: null });
+    expect(await totalOf(athletes[0]!, '2026-02-25')).toBe(360);
+  });
+});
+
+describe('quality', () => {
+  it('is judged anew with the values it was judged by', async () => {
+    const { athleteId } = await club.athlete(squadId, { name: 'Hedda' });
+    const { body } = await enter(athleteId, threshold('max-heart-rate', 'running', 180, '2026-01-01'));
+    const run = { startedAt: '2026-02-01T10:00:00Z', durationMin: 30, modality: 'running', meanHeartRateBpm: 182 };
+    const id = await log(athleteId, run);
+    const read = async () => (await api('GET', `/v1/sessions/${id}`)).body;
+    expect(await read()).toMatchObject({ quality: 'suspect', version: 1 });
+    const path = `/v1/athletes/${athleteId}/thresholds/${body.items[0].id}/correction`;
+    const answer = await api('POST', path, { value: 190, reason: 'new maximum in a race' });
+    expect(answer.body.reweighed.sessionIds).toEqual([id]);
+    expect(await read()).toMatchObject({ quality: 'ok', qualityNotes: [], version: 1 });
+  });
+});
+
+describe('a change that touches more than 500 sessions', () => {
+  it('becomes a task that goes on where a crash left it, and does nothing twice', async () => {
+    const { athleteId } = await club.athlete(squadId, { name: 'Greta', memberFrom: '2020-01-01' });
+    await enter(
+      athleteId,
+      threshold('lt1-power', 'rowing', 150, '2020-01-01'),
+      threshold('critical-power', 'rowing', 240, '2020-01-01'),
+    );
+    const first = await log(athleteId, powerSession('rowing', '2024-01-01'));
+    await copySession(first, 599);
+    const before = await weights();
+    const answer = await enter(athleteId, threshold('critical-power', 'rowing', 255, '2021-01-01'));
+    expect(answer.body.reweighed).toEqual({ sessionIds: [], task: { id: expect.any(String), total: 600 } });
+    const task: string = answer.body.reweighed.task.id;
+    expect(await changedSince(before)).toEqual([]);
+    const [job] = await rowsOf(test.db.ownerUrl, `select name, data from pgboss.job where name = 'reweigh'`);
+    expect(JSON.stringify(job)).toContain(task);
+
+    const reweigh = test.app.get(ReweighService, { strict: false });
+    const repository = test.app.get(ReweighRepository, { strict: false });
+    const advance = repository.advance.bind(repository);
+    let batches = 0;
+    repository.advance = async (...given) => {
+      batches += 1;
+      if (batches === 2) throw new Error('the machine stops here');
+      return advance(...given);
+    };
+    await expect(reweigh.processTask(club.clubId, task)).rejects.toThrow('the machine stops here');
+    const half = await api('GET', `/v1/reweighings/${task}`);
+    expect(half.body).toMatchObject({ state: 'running', total: 600, done: 200 });
+    expect((await changedSince(before)).toSorted()).toEqual(half.body.sessionIds.toSorted());
+
+    await Promise.all([reweigh.processTask(club.clubId, task), reweigh.processTask(club.clubId, task)]);
+    repository.advance = advance;
+    const done = await api('GET', `/v1/reweighings/${task}`);
+    expect(done.body).toMatchObject({ state: 'done', total: 600, done: 600 });
+    expect(new Set(done.body.sessionIds).size).toBe(600);
+    expect(done.body.sessionIds).toHaveLength(600);
+    expect((await changedSince(before)).length).toBe(600);
+    const after = await weights();
+    await reweigh.processTask(club.clubId, task);
+    expect(await changedSince(after)).toEqual([]);
+    const [sum] = await rowsOf<{ days: number; load: number }>(
+      test.db.ownerUrl,
+      'select count(*)::int as days, sum(domain_load)::int as load from daily_total where athlete_id = $1',
+      [athleteId],
+    );
+    expect(sum).toEqual({ days: 600, load: 600 * 120 });
+  });
+
+  it('is found by those who may read thresholds, and by nobody of another club', async () => {
+    const [task] = await rowsOf<{ id: string }>(test.db.ownerUrl, 'select id from reweigh_task');
+    const other = await test.newClub();
+    expect((await test.api('GET', `/v1/reweighings/${task!.id}`, { token: other.adminToken })).status).toBe(404);
+  });
+});
+
+/** The same session on the days after, with its weight and day's sums, without asking 599 times. */
+async function copySession(id: string, times: number): Promise<void> {
+  const columns = async (table: string) =>
+    (
+      await rowsOf<{ name: string }>(
+        test.db.ownerUrl,
+        `select column_name as name from information_schema.columns where table_name = $1 and table_schema = 'public'`,
+        [table],
+      )
+    ).map(({ name }) => name);
+  const list = (names: string[], instead: Record<string, string>) =>
+    names.map((name) => instead[name] ?? `o.${name}`).join();
+  const newId = `('0198f3a0-0000-7000-8000-' || lpad(to_hex(n), 12, '0'))::uuid`;
+  const session = await columns('training_session');
+  await rowsOf(
+    test.db.ownerUrl,
+    `insert into training_session (${session.join()}) select ${list(session, {
+      id: newId,
+      training_day: 'o.training_day + n',
+      started_at: `o.started_at + n * interval '1 day'`,
+    })} from training_session o, generate_series(1, $2::int) n where o.id = $1`,
+    [id, times],
+  );
+  const weight = await columns('session_weight');
+  await rowsOf(
+    test.db.ownerUrl,
+    `insert into session_weight (${weight.join()}) select ${list(weight, { session_id: newId })}
+     from session_weight o, generate_series(1, $2::int) n where o.session_id = $1`,
+    [id, times],
+  );
+  const total = await columns('daily_total');
+  await rowsOf(
+    test.db.ownerUrl,
+    `insert into daily_total (${total.join()}) select ${list(total, { day: 'o.day + n' })}
+     from daily_total o join training_session s on s.athlete_id = o.athlete_id and s.training_day = o.day,
+       generate_series(1, $2::int) n where s.id = $1`,
+    [id, times],
+  );
+}
