@@ -59,7 +59,9 @@ export async function startMailServer(): Promise<MailServer> {
     url: `smtp://127.0.0.1:${port}`,
     accepted,
     offered: () => offered,
-    hold: () => (held = new Promise((resolve) => (release = resolve))),
+    hold: () => {
+      held = new Promise((resolve) => (release = resolve));
+    },
     release: () => release(),
     close: () => new Promise((resolve) => server.close(resolve)),
   };
