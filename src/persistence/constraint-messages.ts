@@ -51,4 +51,87 @@ export const constraintMessages: Readonly<Record<string, ConstraintMessage>> = {
   zone_period_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
   zone_period_no_overlap: { kind: 'conflict', field: 'from', allowed: 'days no other zone period of the athlete has' },
   zone_period_order: { kind: 'rule', field: 'to', allowed: 'a date not before the first day' },
+
+  threshold_value_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
+  threshold_value_error_range: {
+    kind: 'validation',
+    field: 'standardError',
+    allowed: 'a number from 0 to below the value, in the unit of the value',
+  },
+  threshold_value_no_overlap: {
+    kind: 'conflict',
+    field: 'validFrom',
+    allowed: 'a day from which no other value of the quantity, modality and setting is valid',
+  },
+  threshold_value_order: { kind: 'rule', field: 'validFrom', allowed: 'a date not after the last day' },
+  threshold_value_range: { kind: 'validation', field: 'value', allowed: 'a number in the range of the quantity' },
+  threshold_value_supersedes_fk: { kind: 'not-found', field: 'valueId', allowed: 'a value of the club' },
+
+  training_session_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
+  training_session_distance_range: { kind: 'validation', field: 'distanceM', allowed: 'above 0, at most 500000 m' },
+  training_session_duration_range: { kind: 'validation', field: 'durationMin', allowed: 'above 0, at most 1440 min' },
+  training_session_external_once: {
+    kind: 'conflict',
+    field: 'externalId',
+    allowed: 'one that is not stored yet for this athlete and source',
+  },
+  training_session_heart_rate_range: {
+    kind: 'validation',
+    field: 'meanHeartRateBpm',
+    allowed: 'mean 25 to 240 bpm, peak 25 to 250 bpm',
+  },
+  training_session_intended_rating_range: { kind: 'validation', field: 'intendedRating', allowed: 'from 0 to 10' },
+  training_session_kind_known: { kind: 'validation', field: 'kind', allowed: 'training, competition or test' },
+  training_session_quality_known: { kind: 'validation', field: 'quality', allowed: 'ok, question or suspect' },
+  training_session_rating_delay_range: { kind: 'validation', field: 'ratingDelayMin', allowed: 'from 0 to 20160 min' },
+  training_session_rating_range: { kind: 'validation', field: 'rating', allowed: 'from 0 to 10' },
+  training_session_withdrawn_why: { kind: 'validation', field: 'reason', allowed: 'required to withdraw a session' },
+
+  session_revision_session_fk: { kind: 'not-found', field: 'sessionId', allowed: 'a session of the club' },
+  session_weight_domain_load_when_present: {
+    kind: 'rule',
+    field: 'domainLoad',
+    allowed: 'a value where it is present, none elsewhere',
+  },
+  session_weight_domain_state_known: {
+    kind: 'rule',
+    field: 'domainState',
+    allowed: 'present, absent or not-applicable',
+  },
+  session_weight_minutes_not_negative: { kind: 'rule', field: 'weight', allowed: 'minutes and loads from 0 on' },
+  session_weight_policy_fk: { kind: 'not-found', field: 'policyId', allowed: 'a policy of the club' },
+  session_weight_session_fk: { kind: 'not-found', field: 'sessionId', allowed: 'a session of the club' },
+  daily_total_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
+  daily_total_not_negative: { kind: 'rule', field: 'dailyTotal', allowed: 'sums from 0 on' },
+  reweigh_task_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
+
+  day_closing_squad_fk: { kind: 'not-found', field: 'squadId', allowed: 'a squad of the club' },
+  day_unknown_athlete_fk: { kind: 'not-found', field: 'unknownAthleteIds', allowed: 'athletes of the club' },
+  day_unknown_closing_fk: { kind: 'conflict', field: 'day', allowed: 'a day that is closed' },
+
+  availability_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
+  availability_cause_known: {
+    kind: 'validation',
+    field: 'cause',
+    allowed: 'illness, injury, complaint, away or other',
+  },
+  availability_no_overlap: {
+    kind: 'conflict',
+    field: 'from',
+    allowed: 'days no other entry of the athlete has',
+    hint: 'End it first.',
+  },
+  availability_order: { kind: 'validation', field: 'to', allowed: 'a date not before from' },
+  availability_state_known: { kind: 'validation', field: 'state', allowed: 'full, modified or none' },
+
+  load_period_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
+  load_period_no_overlap: {
+    kind: 'conflict',
+    field: 'from',
+    allowed: 'days no other period of the same squad or athlete has',
+  },
+  load_period_order: { kind: 'validation', field: 'to', allowed: 'a date not before from' },
+  load_period_overload_length: { kind: 'rule', field: 'to', allowed: 'at most 21 days for an overload' },
+  load_period_purpose_known: { kind: 'validation', field: 'purpose', allowed: 'overload, unload or taper' },
+  load_period_squad_fk: { kind: 'not-found', field: 'squadId', allowed: 'a squad of the club' },
 };

@@ -1,0 +1,191 @@
+import { randomUUID } from 'node:crypto';
+import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
+import pg from 'pg';
+import { translateDatabaseError } from '../../src/persistence/constraint-errors.ts';
+import { constraintMessages } from '../../src/persistence/constraint-messages.ts';
+import { AppError } from '../../src/platform/errors.ts';
+import { createTestDatabase } from '../support/database.ts';
+import type { TestDatabase } from '../support/database.ts';
+
+// Every constraint of what is logged is broken once, past the schemas of the edge, and says what is allowed.
+const tables = [
+  'threshold_value',
+  'training_session',
+  'session_revision',
+  'session_weight',
+  'daily_total',
+  'day_closing',
+  'day_unknown',
+  'availability',
+  'load_period',
+  'reweigh_task',
+];
+const [club, squad, athlete, session] = [randomUUID(), randomUUID(), randomUUID(), randomUUID()];
+const now = '2026-03-02T12:00:00Z';
+
+let db: TestDatabase;
+let owner: pg.Client;
+beforeAll(async () => {
+  db = await createTestDatabase();
+  owner = new pg.Client({ connectionString: db.ownerUrl });
+  await owner.connect();
+  await insert('club', { id: club, name: 'Club', created_at: now });
+  await insert('squad', { club_id: club, id: squad, name: 'Squad', zone: 'UTC', created_at: now });
+  await insert('athlete', { club_id: club, id: athlete, name: 'Alex', created_at: now });
+  await insert('threshold_value', { ...newValue(), valid_from: '2026-01-01', valid_to: null });
+  await insert('training_session', { ...newSession(), id: session, external_id: 'x' });
+  await insert('day_closing', { club_id: club, squad_id: squad, day: '2026-01-01', closed_at: now });
+  await insert('availability', { ...newAvailability(), valid_from: '2026-01-01', valid_to: null });
+  await insert('load_period', { ...newPeriod(), valid_from: '2026-01-01', valid_to: '2026-01-10' });
+});
+afterAll(async () => {
+  await owner.end();
+  await db.drop();
+});
+
+async function insert(table: string, row: object): Promise<void> {
+  const names = Object.keys(row);
+  const places = names.map((_, i) => `$${i + 1}`);
+  await owner.query(`insert into ${table} (${names.join(', ')}) values (${places.join(', ')})`, Object.values(row));
+}
+
+const own = () => ({ club_id: club, id: randomUUID() });
+const newValue = () => ({
+  ...{ ...own(), athlete_id: athlete, quantity: 'critical-power', modality: 'rowing', setting: 'any', value: 280 },
+  ...{ method: 'test', valid_from: '2025-01-01', valid_to: '2025-12-31', entered_at: now },
+});
+const newSession = () => ({
+  ...{ ...own(), athlete_id: athlete, source: 'api', started_at: now, zone: 'UTC', training_day: '2026-03-02' },
+  ...{ duration_min: 60, kind: 'training', modality: 'rowing', setting: 'any', content: { kind: 'none' } },
+  ...{ quality: 'ok', quality_notes: [], version: 1, created_at: now, updated_at: now },
+});
+const newWeight = () => ({
+  ...{ club_id: club, session_id: session, domain_state: 'absent', basis: 'rating', measures: '[]' },
+  ...{ thresholds_used: '[]', method_version: '1', weighed_at: now },
+});
+const newTotal = () => ({
+  ...{ club_id: club, athlete_id: athlete, day: '2026-03-02', sessions: 1, minutes: 60, rating_load: 0 },
+  ...{ rating_missing: 0, domain_load: 0, domain_missing: 0, moderate_min: 0, heavy_min: 0, severe_min: 0 },
+  ...{ extreme_min: 0, applicable_min: 0, covered_min: 0, basis_minutes: {}, suspect: 0 },
+});
+const newUnknown = () => ({ club_id: club, athlete_id: athlete, squad_id: squad, day: '2026-01-01' });
+const newAvailability = () => ({
+  ...{ ...own(), athlete_id: athlete, state: 'none', cause: 'illness', allowed_modalities: [] },
+  ...{ valid_from: '2025-01-01', valid_to: '2025-01-05', entered_at: now },
+});
+const newPeriod = () => ({
+  ...{ ...own(), squad_id: squad, purpose: 'taper', valid_from: '2025-01-01', valid_to: '2025-01-31', entered_at: now },
+});
+const newTask = () => ({
+  ...{ ...own(), athlete_id: athlete, scope: {}, total: 1, done: 0, touched: [], state: 'waiting', created_at: now },
+});
+const backwards = { valid_from: '2020-02-02', valid_to: '2020-02-01' };
+const stranger = randomUUID();
+
+type Case = [constraint: string, row: object, status: number];
+const threshold = (name: string, row: object, status: number): Case => [
+  `threshold_value_${name}`,
+  { ...newValue(), ...row },
+  status,
+];
+const logged = (name: string, row: object, status: number): Case => [
+  `training_session_${name}`,
+  { ...newSession(), ...row },
+  status,
+];
+const weight = (name: string, row: object, status: number): Case => [
+  `session_weight_${name}`,
+  { ...newWeight(), ...row },
+  status,
+];
+const absence = (name: string, row: object, status: number): Case => [
+  `availability_${name}`,
+  { ...newAvailability(), ...row },
+  status,
+];
+const period = (name: string, row: object, status: number): Case => [
+  `load_period_${name}`,
+  { ...newPeriod(), ...row },
+  status,
+];
+
+const broken: Case[] = [
+  threshold('athlete_fk', { athlete_id: stranger }, 404),
+  threshold('error_range', { standard_error: 280 }, 400),
+  threshold('no_overlap', { valid_from: '2025-06-01', valid_to: null }, 409),
+  threshold('order', backwards, 422),
+  threshold('range', { value: 1001 }, 400),
+  threshold('range', { quantity: 'lactate' }, 400),
+  threshold('supersedes_fk', { supersedes: stranger }, 404),
+
+  logged('athlete_fk', { athlete_id: stranger }, 404),
+  logged('distance_range', { distance_m: 0 }, 400),
+  logged('duration_range', { duration_min: 1440.5 }, 400),
+  logged('external_once', { external_id: 'x' }, 409),
+  logged('heart_rate_range', { mean_heart_rate_bpm: 241 }, 400),
+  logged('heart_rate_range', { peak_heart_rate_bpm: 251 }, 400),
+  logged('intended_rating_range', { intended_rating: 10.5 }, 400),
+  logged('kind_known', { kind: 'play' }, 400),
+  logged('quality_known', { quality: 'good' }, 400),
+  logged('rating_delay_range', { rating_delay_min: -1 }, 400),
+  logged('rating_range', { rating: 'NaN' }, 400),
+  logged('withdrawn_why', { withdrawn_at: now }, 400),
+
+  [
+    'session_revision_session_fk',
+    { ...own(), id: undefined, session_id: stranger, version: 1, snapshot: {}, changed_at: now },
+    404,
+  ],
+  weight('domain_load_when_present', { domain_state: 'present' }, 422),
+  weight('domain_state_known', { domain_state: 'maybe' }, 422),
+  weight('minutes_not_negative', { heavy_min: -1 }, 422),
+  weight('policy_fk', { policy_id: stranger }, 404),
+  weight('session_fk', { session_id: stranger }, 404),
+  ['daily_total_athlete_fk', { ...newTotal(), athlete_id: stranger }, 404],
+  ['daily_total_not_negative', { ...newTotal(), minutes: -1 }, 422],
+  ['reweigh_task_athlete_fk', { ...newTask(), athlete_id: stranger }, 404],
+
+  ['day_closing_squad_fk', { club_id: club, squad_id: stranger, day: '2026-01-02', closed_at: now }, 404],
+  ['day_unknown_athlete_fk', { ...newUnknown(), athlete_id: stranger }, 404],
+  ['day_unknown_closing_fk', { ...newUnknown(), day: '2026-01-02' }, 409],
+
+  absence('athlete_fk', { athlete_id: stranger }, 404),
+  absence('cause_known', { cause: 'mood' }, 400),
+  absence('no_overlap', { valid_from: '2026-06-01', valid_to: null }, 409),
+  absence('order', backwards, 400),
+  absence('state_known', { state: 'some' }, 400),
+
+  period('athlete_fk', { athlete_id: stranger }, 404),
+  period('no_overlap', { valid_from: '2026-01-10', valid_to: '2026-01-11' }, 409),
+  period('order', backwards, 400),
+  period('overload_length', { purpose: 'overload', valid_to: '2025-01-22' }, 422),
+  period('purpose_known', { purpose: 'fun' }, 400),
+  period('squad_fk', { squad_id: stranger }, 404),
+];
+
+describe('constraints of what is logged', () => {
+  test.each(broken)('%s', async (constraint, row, status) => {
+    const table = tables.find((name) => constraint.startsWith(`${name}_`))!;
+    const given = Object.fromEntries(Object.entries(row).filter(([, value]) => value !== undefined));
+    const error: unknown = await insert(table, given).then(
+      () => undefined,
+      (refusal: unknown) => refusal,
+    );
+    expect(error).toMatchObject({ constraint });
+    const told = translateDatabaseError(error);
+    expect(told).toBeInstanceOf(AppError);
+    const { field, allowed } = constraintMessages[constraint]!;
+    expect(told).toMatchObject({ status, fields: [{ field, allowed }] });
+  });
+
+  test('none is left out', async () => {
+    const { rows } = await owner.query<{ conname: string }>(
+      `select conname from pg_constraint
+       where conrelid = any($1::regclass[]) and contype in ('c', 'f', 'u', 'x') order by conname`,
+      [tables],
+    );
+    expect([...new Set(broken.map(([constraint]) => constraint))].toSorted()).toEqual(
+      rows.map(({ conname }) => conname),
+    );
+  });
+});
