@@ -35,10 +35,11 @@ type Series = Exclude<EChartsOption['series'], undefined | readonly unknown[]>;
 export function athleteChart(chart: AthleteChart): EChartsOption {
   const { days } = chart;
   const componentUnit = chart.componentScale === 'share' ? '% of own 26-week median' : 'load units';
+  const now = days.findLast(({ knownOf28 }) => knownOf28 !== null)?.knownOf28 ?? 0;
   const titles = [
     `Daily ${MEASURE_WORDS[chart.measure]}`,
     `Acute and chronic load, mean per day (${FORM_WORDS[chart.ratioForm]})`,
-    'Days known of the last 28 (24 are needed)',
+    `Days known of the last 28: now ${now} (24 are needed, fewer in purple)`,
     `Long and short load, ${componentUnit}, read each morning`,
   ];
   return {
@@ -200,7 +201,7 @@ function knownStrip(days: readonly ChartDay[]): Series[] {
       barWidth: '78%',
       data: days.map(({ knownOf28 }) => ({
         value: knownOf28,
-        itemStyle: { color: knownOf28 >= 24 ? '#7C8894' : PURPLE },
+        itemStyle: { color: (knownOf28 ?? 0) >= 24 ? '#7C8894' : PURPLE },
       })),
     },
   ];

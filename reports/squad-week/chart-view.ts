@@ -8,7 +8,7 @@ const WINDOW = 28;
 /** The last twelve weeks of one athlete as the pictures show them. */
 export function athleteChartOf(name: string, series: AthleteSeries, ratioLimit: number): AthleteChart {
   const from = Math.max(0, series.rows.length - DAYS_SHOWN);
-  const scale = series.rows.at(-1)?.longLoad.share === null ? 'units' : 'share';
+  const scale = series.after.longLoad.share === null ? 'units' : 'share';
   const known = series.rows.map((row) => state(row, series) === 'known');
   const days = series.rows.slice(from).map((row, i): ChartDay => {
     const index = from + i;
@@ -23,6 +23,17 @@ export function athleteChartOf(name: string, series: AthleteSeries, ratioLimit: 
       short: band(row.shortLoad, scale),
     };
   });
+  const { after } = series;
+  const morning: ChartDay = {
+    day: after.day,
+    state: 'after',
+    load: null,
+    acute: null,
+    chronic: null,
+    knownOf28: null,
+    long: band(after.longLoad, scale),
+    short: band(after.shortLoad, scale),
+  };
   return {
     athleteId: series.athleteId,
     name,
@@ -30,7 +41,7 @@ export function athleteChartOf(name: string, series: AthleteSeries, ratioLimit: 
     ratioLimit,
     ratioForm: series.form,
     componentScale: scale,
-    days,
+    days: [...days, morning],
     unavailable: spells(series.rows.slice(from)),
     altText: altText(name, series, days),
   };

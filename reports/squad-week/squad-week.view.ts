@@ -91,11 +91,12 @@ export interface AthleteMeasures {
 
 export interface ChartDay {
   day: string;
-  state: 'known' | 'partial' | 'unknown';
+  /** 'after': the morning after the last closed day, on which only long and short load are read. */
+  state: 'known' | 'partial' | 'unknown' | 'after';
   load: number | null;
   acute: number | null;
   chronic: number | null;
-  knownOf28: number;
+  knownOf28: number | null;
   long: Band | null;
   short: Band | null;
 }

@@ -32,7 +32,7 @@ export function font(options: Partial<Font> = {}): Partial<Font> {
 export const solid = (hex: string): Fill => ({ type: 'pattern', pattern: 'solid', fgColor: { argb: argb(hex) } });
 
 export const hairline: Partial<Borders> = { bottom: { style: 'thin', color: { argb: RULE } } };
-export const headLine: Partial<Borders> = { bottom: { style: 'medium', color: { argb: INK } } };
+export const headLine: Partial<Borders> = { bottom: { style: 'thin', color: { argb: INK } } };
 
 export const NUMBERS = { load: '#,##0', minutes: '#,##0', percent: '0" %"', two: '0.00', count: '0' } as const;
 

@@ -4,15 +4,15 @@ import { LEVEL_WORDS, longDate, NO_PLAN, shortDate, squadLine, weekWords } from 
 import type { AthleteLine, Changes, Edition, SquadWeekView } from '../squad-week/squad-week.view.ts';
 
 const COLUMNS = [
-  { title: 'Athlete', width: 21 },
-  { title: 'Availability', width: 14 },
+  { title: 'Athlete', width: 19 },
+  { title: 'Availability', width: 13 },
   { title: 'Level', width: 10 },
-  { title: 'Why', width: 60 },
+  { title: 'Why', width: 54 },
   { title: 'Since', width: 9 },
-  { title: 'Ask or next step', width: 36 },
-  { title: "Week's load,\n% of own usual", width: 17 },
-  { title: 'Done of\nplanned', width: 17 },
-  { title: 'Days\ncomplete', width: 11 },
+  { title: 'Ask or next step', width: 32 },
+  { title: "Week's load,\n% of own usual", width: 16 },
+  { title: 'Done of\nplanned', width: 13 },
+  { title: 'Days\ncomplete', width: 10 },
 ];
 const RIGHT = new Set([6]);
 const SHEET_WIDTH = COLUMNS.reduce((sum, { width }) => sum + width, 0);
@@ -66,7 +66,7 @@ function athleteRow(row: Row, line: AthleteLine): void {
   text(cell(6), line.ask);
   const { value, instead, atLeast } = line.weekShare;
   figure(cell(7), value, instead, atLeast === true ? '"at least "0" %"' : NUMBERS.percent);
-  text(cell(8), `${line.sessionsDone} done, ${NO_PLAN}`);
+  text(cell(8), `${line.sessionsDone} · ${NO_PLAN}`);
   text(cell(9), `${line.daysComplete} of ${line.daysOf}`);
   for (let column = 1; column <= COLUMNS.length; column += 1) {
     cell(column).border = hairline;
@@ -77,7 +77,7 @@ function athleteRow(row: Row, line: AthleteLine): void {
     { text: line.sentence, width: COLUMNS[3]!.width },
     { text: line.ask, width: COLUMNS[5]!.width },
     { text: instead ?? '', width: COLUMNS[6]!.width },
-    { text: `${line.sessionsDone} done, ${NO_PLAN}`, width: COLUMNS[7]!.width },
+    { text: `${line.sessionsDone} · ${NO_PLAN}`, width: COLUMNS[7]!.width },
   ]);
 }
 

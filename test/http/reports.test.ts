@@ -97,7 +97,7 @@ describe('the record', () => {
     const { names, table } = await readWorkbook(content);
     expect(names).toEqual(['Monday', 'Measures', 'Method']);
     expect(table('Measures').value('=Anna', 'Rating load, week')).toBe(300);
-    expect(table('Monday').value('=Anna', 'Done of')).toBe('1 done, no plan');
+    expect(table('Monday').value('=Anna', 'Done of')).toBe('1 · no plan');
   });
 
   test('a correction makes a new version that says what differs; the first one stays as it was', async () => {

@@ -42,7 +42,7 @@ export function ratioWithheld(
   if (returnDay !== null) return `day ${returnDay} of return`;
   if (!(chronic > 0)) return `no load in ${known.chronicOf} days`;
   if (basisShift > BASIS_MIX_LIMIT) {
-    return `minutes counted another way: ${Math.round(basisShift)} points between the windows`;
+    return `minutes counted another way (${Math.round(basisShift)} points)`;
   }
   return null;
 }

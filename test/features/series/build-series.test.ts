@@ -168,7 +168,7 @@ describe('one series, one basis', () => {
     );
     const { ratio } = last(records).row;
     expect(ratio.value).toBeNull();
-    expect(ratio.withheld).toBe('minutes counted another way: 75 points between the windows');
+    expect(ratio.withheld).toBe('minutes counted another way (75 points)');
     expect(ratio.basisMix).toEqual({ acute: { 'heart-rate': 100 }, chronic: { interval: 75, 'heart-rate': 25 } });
   });
 
