@@ -7,7 +7,7 @@ import type { Clock } from '../src/platform/clock.ts';
 import { databaseAppUrl } from '../src/platform/database-url.ts';
 import type { Env } from '../src/platform/env.ts';
 import { JobWorkers } from '../src/platform/job-workers.ts';
-import { loggerOptions } from '../src/platform/logger.ts';
+import { httpLoggerOptions } from '../src/platform/logger.ts';
 import { ServicesModule } from '../src/services.module.ts';
 import { LogReminderJob } from './log-reminder.job.ts';
 import { NightlyFlagsJob } from './nightly-flags.job.ts';
@@ -32,7 +32,7 @@ const handlers: Type<JobHandler>[] = [WeeklyReportJob, LogReminderJob, NightlyFl
 @Module({})
 export class JobHandlersModule {
   static for(env: Env, clock: Clock): DynamicModule {
-    const logging = LoggerModule.forRoot({ pinoHttp: loggerOptions(env) });
+    const logging = LoggerModule.forRoot({ pinoHttp: httpLoggerOptions(env) });
     return {
       module: JobHandlersModule,
       imports: [logging, ServicesModule.for(env, clock)],

@@ -1,6 +1,7 @@
 import { NestFactory } from '@nestjs/core';
 import type { NestFastifyApplication } from '@nestjs/platform-fastify';
 import { Logger } from 'nestjs-pino';
+import type { DestinationStream } from 'pino';
 import { AppModule } from './app.module.ts';
 import { serveDocs } from './delivery/http/docs.ts';
 import { createAdapter, prepareServer } from './delivery/http/server.ts';
@@ -16,9 +17,14 @@ export interface RunningApi {
   close: () => Promise<void>;
 }
 
-/** The API, ready to listen. */
-export async function createHttpApp(env: Env, clock: Clock): Promise<NestFastifyApplication> {
-  const app = await NestFactory.create<NestFastifyApplication>(AppModule.for(env, clock), createAdapter(clock), {
+/** The API, ready to listen; logs go to standard output where nothing else is said. */
+export async function createHttpApp(
+  env: Env,
+  clock: Clock,
+  logTo?: DestinationStream,
+): Promise<NestFastifyApplication> {
+  const module = AppModule.for(env, clock, logTo);
+  const app = await NestFactory.create<NestFastifyApplication>(module, createAdapter(clock), {
     bodyParser: false,
     bufferLogs: true,
     abortOnError: false,
@@ -36,8 +42,8 @@ export async function createHttpApp(env: Env, clock: Clock): Promise<NestFastify
 }
 
 /** Starts the API in this process at HOST and PORT. Signals are the caller's matter. */
-export async function runApi(env: Env, clock: Clock = clockOf(env)): Promise<RunningApi> {
-  const app = await createHttpApp(env, clock);
+export async function runApi(env: Env, clock: Clock = clockOf(env), logTo?: DestinationStream): Promise<RunningApi> {
+  const app = await createHttpApp(env, clock, logTo);
   try {
     await app.listen(env.PORT, env.HOST);
   } catch (error) {

@@ -3,16 +3,23 @@ import { pino } from 'pino';
 import type { DestinationStream, Logger, LoggerOptions } from 'pino';
 import type { Env } from './env.ts';
 
+interface LoggedRequest {
+  id?: unknown;
+  method?: unknown;
+  originalUrl?: unknown;
+  url?: unknown;
+}
+
 /**
  * What may be written about a request: never its body, headers, query or parameters beyond the path, because all of
  * them can carry health data or access keys.
  */
 export const requestSerializers = {
-  req: (request: { id?: unknown; method?: unknown; url?: unknown }) => ({
-    id: request.id,
-    method: request.method,
-    path: typeof request.url === 'string' ? request.url.split('?', 1)[0] : undefined,
-  }),
+  req: ({ id, method, originalUrl, url }: LoggedRequest) => {
+    // Middleware sees a shortened url and the whole one beside it.
+    const whole = originalUrl ?? url;
+    return { id, method, path: typeof whole === 'string' ? whole.split('?', 1)[0] : undefined };
+  },
   res: (response: { statusCode?: unknown }) => ({ status: response.statusCode }),
   err: (error: unknown) => errorForLog(error),
 };
@@ -36,6 +43,11 @@ export function loggerOptions(env: Pick<Env, 'LOG_LEVEL'>): LoggerOptions {
       },
     },
   };
+}
+
+/** For pino-http, which otherwise hands the serializers copies it has made itself: an error would be none any more. */
+export function httpLoggerOptions(env: Pick<Env, 'LOG_LEVEL'>): LoggerOptions & { wrapSerializers: false } {
+  return { ...loggerOptions(env), wrapSerializers: false };
 }
 
 export function createLogger(env: Pick<Env, 'LOG_LEVEL'>, destination?: DestinationStream): Logger {

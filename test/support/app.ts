@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type { NestFastifyApplication } from '@nestjs/platform-fastify';
+import type { DestinationStream } from 'pino';
 import { runApi } from '../../src/http-app.ts';
 import type { FixedClock } from '../../src/platform/clock.ts';
 import { readEnv } from '../../src/platform/env.ts';
@@ -52,18 +53,18 @@ export interface TestApp {
 }
 
 /** The real API on a free port, against a database of its own. */
-export async function startTestApp(options: { clock?: FixedClock } = {}): Promise<TestApp> {
+export async function startTestApp(options: { clock?: FixedClock; logTo?: DestinationStream } = {}): Promise<TestApp> {
   const db = await createTestDatabase();
   const clock = options.clock ?? fixedClock();
   const env = readEnv({
     DATABASE_URL: db.ownerUrl,
     DATABASE_APP_URL: db.appUrl,
     PORT: '0',
-    LOG_LEVEL: process.env.TEST_LOG_LEVEL ?? 'silent',
+    LOG_LEVEL: options.logTo === undefined ? (process.env.TEST_LOG_LEVEL ?? 'silent') : 'debug',
     LOADWEIR_MODE: 'test',
     LOADWEIR_OPERATOR_KEY: operatorKey,
   });
-  const { url, app, close } = await runApi(env, clock).catch(async (error: unknown) => {
+  const { url, app, close } = await runApi(env, clock, options.logTo).catch(async (error: unknown) => {
     await db.drop();
     throw error;
   });
