@@ -3,6 +3,7 @@ import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
 import pg from 'pg';
 import { startTestApp } from '../support/app.ts';
 import type { ApiAnswer, TestApp, TestClub } from '../support/app.ts';
+import { routesOf } from '../support/routes.ts';
 
 let app: TestApp;
 let club: TestClub;
@@ -157,6 +158,11 @@ describe('the description', () => {
     const { post } = body.paths['/v1/squads'];
     expect(post.requestBody.content['application/json'].schema.required).toEqual(['name', 'zone']);
     expect(post.responses['201'].content['application/json'].schema.properties.id).toBeDefined();
+    const served = routesOf(app.app).map(({ path }) => path.replace(/:(\w+)/g, '{$1}'));
+    expect(new Set(Object.keys(body.paths as object))).toEqual(new Set(served));
+    expect(post.parameters).toEqual([expect.objectContaining({ name: 'Idempotency-Key', in: 'header' })]);
+    expect(post.responses.default.content['application/problem+json']).toBeDefined();
+    expect(body.paths['/v1/squads'].get.security).toEqual([{ bearer: [] }]);
     expect(Object.keys(body.paths as object)).toContain('/v1/athletes/{athleteId}/memberships/{membershipId}/end');
   });
 });

@@ -1,5 +1,6 @@
 import type { NestFastifyApplication } from '@nestjs/platform-fastify';
 import { DocumentBuilder, SwaggerModule } from '@nestjs/swagger';
+import type { OpenAPIObject } from '@nestjs/swagger';
 
 const cautions =
   'Flags are a screen, not a diagnosis: the team physician decides. Dates are YYYY-MM-DD, both ends included; ' +
@@ -16,6 +17,7 @@ export function serveDocs(app: NestFastifyApplication): void {
     .addBearerAuth({ type: 'http', scheme: 'bearer', description: 'The operator’s key' }, 'operator')
     .build();
   const document = SwaggerModule.createDocument(app, description);
+  for (const [path, item] of Object.entries(document.paths)) sayWhatAllShare(path, item);
   SwaggerModule.setup('docs', app, document, {
     jsonDocumentUrl: 'docs/json',
     raw: ['json'],
@@ -23,3 +25,50 @@ export function serveDocs(app: NestFastifyApplication): void {
     swaggerOptions: { validatorUrl: null },
   });
 }
+
+type PathItem = OpenAPIObject['paths'][string];
+
+/** What the way in and the way out do for every route: keys, the bearer's token, problem documents. */
+function sayWhatAllShare(path: string, item: PathItem): void {
+  for (const method of ['get', 'post', 'put', 'delete'] as const) {
+    const operation = item[method];
+    if (operation === undefined) continue;
+    operation.responses.default = { description: 'A problem', content: { 'application/problem+json': problem } };
+    if (!path.startsWith('/v1/')) continue;
+    operation.security ??= [{ bearer: [] }];
+    const parameters = (operation.parameters ??= []);
+    if (method === 'post' && !parameters.some((one) => 'name' in one && one.name === idempotencyKey.name)) {
+      parameters.push(idempotencyKey);
+    }
+  }
+}
+
+const idempotencyKey = {
+  name: 'Idempotency-Key',
+  in: 'header' as const,
+  required: false,
+  description: 'The same request with the same key is done once and answered the same.',
+  schema: { type: 'string', minLength: 1, maxLength: 200, pattern: '^[\\x21-\\x7e]+$' },
+};
+
+const text = { type: 'string' };
+const fieldError = {
+  type: 'object',
+  required: ['field', 'allowed'],
+  properties: { field: text, value: {}, allowed: text, hint: text },
+};
+const problem = {
+  schema: {
+    type: 'object',
+    required: ['type', 'title', 'status', 'detail', 'instance', 'correlationId'],
+    properties: {
+      type: { type: 'string', example: 'urn:loadweir:problem:invalid-input' },
+      title: text,
+      status: { type: 'integer' },
+      detail: text,
+      instance: text,
+      correlationId: text,
+      errors: { type: 'array', items: fieldError },
+    },
+  },
+};

@@ -18,6 +18,8 @@ export function createAdapter(clock: Clock): FastifyAdapter {
   return new FastifyAdapter({
     bodyLimit: jsonLimit,
     requestTimeout: 60_000,
+    // What still comes on a kept connection while the server closes is answered like everything else.
+    return503OnClosing: false,
     // A path that cannot be decoded is refused before any filter stands in the way.
     frameworkErrors: (error: Error, request: AppRequest, reply: AppReply) => sendProblem(request, reply, tell(error)),
     genReqId: ({ headers }: IncomingMessage) => {
