@@ -21,7 +21,7 @@ const value = (quantity: string, amount: number, validFrom: string, more: object
   ...{ quantity, modality: 'rowing', value: amount, method: 'step test', validFrom },
   ...more,
 });
-const newAthlete = async () => (await club.athlete(squadId, { name: 'Nora', login: true }))!;
+const newAthlete = async () => club.athlete(squadId, { name: 'Nora', login: true });
 const enter = (athleteId: string, values: object[], token = manager) =>
   test.api('POST', `/v1/athletes/${athleteId}/thresholds`, { token, body: { values } });
 const get = (athleteId: string, path: string, token = manager) =>

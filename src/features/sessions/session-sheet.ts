@@ -116,7 +116,12 @@ function checkedColumns({ row, record }: SheetRecord): SheetColumn[] {
 }
 
 function cellsOf(columns: readonly SheetColumn[], record: readonly string[]): SheetRow['cells'] {
-  return Object.fromEntries(columns.map((column, index) => [column, record[index]!]).filter(([, cell]) => cell !== ''));
+  const cells: SheetRow['cells'] = {};
+  columns.forEach((column, index) => {
+    const cell = record[index] ?? '';
+    if (cell !== '') cells[column] = cell;
+  });
+  return cells;
 }
 
 function isColumn(name: string): name is SheetColumn {

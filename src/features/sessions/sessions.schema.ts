@@ -196,7 +196,7 @@ export const sessionHistorySchema = z.object({
   items: z.array(
     z.object({
       version: z.number(),
-      snapshot: z.record(z.string(), z.json()),
+      snapshot: z.record(z.string(), z.unknown()),
       /** Why this version was replaced; null for the one that stands. */
       reason: z.string().nullable(),
       changedBy: z.uuid().nullable(),

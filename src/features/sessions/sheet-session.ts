@@ -71,7 +71,7 @@ function numberOf(cell: string | undefined, decimalComma: boolean): number | str
 /** An instant as it is; a wall time in the zone the athlete lives in that day. */
 function instantOf(cell: string | undefined, zoneOn: (day: string) => string): string | undefined {
   const wall = /^(\d{4}-\d{2}-\d{2})[ T](\d{2}:\d{2}(?::\d{2})?)$/.exec(cell ?? '');
-  if (wall === null) return cell?.replace(/^(\d{4}-\d{2}-\d{2}) /, '$1T');
+  if (wall === null) return cell?.replace(/^(\d{4}-\d{2}-\d{2})[ T](\d{2}:\d{2})(Z|[+-]\d{2}:\d{2})$/, '$1T$2:00$3');
   try {
     return localDateTime(wall[1]!, wall[2]!, zoneOn(wall[1]!)).toISOString();
   } catch (error) {

@@ -1,12 +1,5 @@
 import { athleteQuantities } from './thresholds.types.ts';
-import type {
-  Modality,
-  Quantity,
-  ResolvedThreshold,
-  Setting,
-  ThresholdSet,
-  ThresholdValue,
-} from './thresholds.types.ts';
+import type { Modality, Quantity, ResolvedThreshold, Setting, ThresholdValue } from './thresholds.types.ts';
 
 type Dated = ResolvedThreshold & Pick<ThresholdValue, 'modality' | 'setting' | 'validTo' | 'withdrawnAt'>;
 

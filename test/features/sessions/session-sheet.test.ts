@@ -68,6 +68,8 @@ describe('sheetSession', () => {
     expect(start('2026-03-01 07:30')).toBe('2026-03-01T06:30:00.000Z');
     expect(start('2026-07-01T07:30')).toBe('2026-07-01T05:30:00.000Z');
     expect(start('2026-07-01T07:30:00+05:30')).toBe('2026-07-01T02:00:00.000Z');
+    expect(start('2026-03-02T07:30+01:00')).toBe('2026-03-02T06:30:00.000Z');
+    expect(start('2026-03-02 07:30Z')).toBe('2026-03-02T07:30:00.000Z');
     expect(start('2026-02-30 07:30')).toEqual([expect.objectContaining({ row: 2, field: 'startedAt' })]);
     expect(start('1.3.2026 7:30')).toEqual([
       expect.objectContaining({ value: '1.3.2026 7:30', allowed: expect.stringContaining('2026-03-02 07:30') }),
