@@ -4,7 +4,6 @@ import { ReportMaker } from '../../src/features/reports/report-maker.service.ts'
 import type { RenderedReport, ReportEdition, ReportView } from '../../src/features/reports/reports.types.ts';
 import { SeriesService } from '../../src/features/series/series.service.ts';
 import { SquadsService } from '../../src/features/squads/squads.service.ts';
-import { squadWeekWorkbook } from '../workbook/workbook.ts';
 import { buildView } from './build-view.ts';
 import { differences } from './changes.ts';
 import { squadWeekMail } from './squad-week.mail.ts';
@@ -47,12 +46,18 @@ export class SquadWeekMaker extends ReportMaker {
 
   async render(view: ReportView, edition: ReportEdition): Promise<RenderedReport> {
     const said = read(view)!;
-    return { workbook: await squadWeekWorkbook(said, edition), mail: squadWeekMail(said, edition) };
+    return { workbook: await workbookOf(said, edition), mail: squadWeekMail(said, edition) };
   }
 
   measures(view: ReportView): unknown[] {
     return read(view)!.measures;
   }
+}
+
+/** What draws and writes workbooks is loaded with the first report: it would take half of the start of a process. */
+async function workbookOf(view: SquadWeekView, edition: ReportEdition): Promise<Buffer> {
+  const { squadWeekWorkbook } = await import('../workbook/workbook.ts');
+  return squadWeekWorkbook(view, edition);
 }
 
 /** Only this maker writes these views; the schema number says whether this program can read them. */
