@@ -38,7 +38,7 @@ export class BossJobWorkers extends JobWorkers implements BeforeApplicationShutd
       monitorIntervalSeconds: 5,
       reindex: false,
     });
-    this.#boss.on('error', options.onError);
+    this.#boss.on('error', (error: unknown) => options.onError(asError(error)));
   }
 
   async work(name: string, options: JobWorkOptions, handle: (attempt: JobAttempt) => Promise<void>): Promise<void> {
@@ -63,4 +63,11 @@ export class BossJobWorkers extends JobWorkers implements BeforeApplicationShutd
     await this.#started.catch(() => undefined);
     await this.#boss.stop({ graceful: true, timeout: this.#options.stopWithinMs ?? 20_000 });
   }
+}
+
+/** The queue reports failures of its workers as plain objects with the message of the error that was. */
+function asError(error: unknown): Error {
+  if (error instanceof Error) return error;
+  const message = (error as { message?: unknown } | null)?.message;
+  return new Error(typeof message === 'string' ? message : 'the queue gave no reason');
 }
