@@ -1,7 +1,10 @@
 import { afterAll, afterEach, beforeAll, describe, expect, it } from '@jest/globals';
 import type { INestApplicationContext } from '@nestjs/common';
+import { randomUUID } from 'node:crypto';
 import { runWorker } from '../../jobs/worker.ts';
 import { readEnv } from '../../src/platform/env.ts';
+import { JobQueue } from '../../src/platform/job-queue.ts';
+import { UnitOfWork } from '../../src/platform/unit-of-work.ts';
 import { startTestApp } from '../support/app.ts';
 import type { TestApp, TestClub } from '../support/app.ts';
 import { fixedClock } from '../support/clock.ts';
@@ -180,5 +183,26 @@ describe('workers', () => {
     ]);
     expect(listed).toContainEqual(['weekly-report', '2026-W49', 'done']);
     expect(listed).toContainEqual(['nightly-flags', '2026-12-04', 'done']);
+  });
+
+  it('weigh anew what a change of policy touches, once', async () => {
+    const taskId = randomUUID();
+    await asOwner(app.db, async (client) => {
+      await client.query(
+        `insert into reweigh_task (club_id, id, athlete_id, scope, total, done, touched, state, created_at)
+         select club_id, $1, id, $2, 14, 0, '{}', 'waiting', $3 from athlete`,
+        [taskId, JSON.stringify({ kind: 'policy', squadId, from: '2026-11-01' }), clock.now()],
+      );
+    });
+    const job = { name: 'reweigh', key: taskId, clubId: club.clubId, data: { clubId: club.clubId, taskId } };
+    const scope = { clubId: club.clubId, personId: null };
+    const queue = () => app.app.get(UnitOfWork).run(scope, () => app.app.get(JobQueue).enqueueOnce(job));
+    expect(await queue()).toBe(true);
+    await startWorker();
+    const progress = async () =>
+      (await app.api('GET', `/v1/reweighings/${taskId}`, { token: people[3]!.token })).body as Record<string, unknown>;
+    await until(async () => (await progress()).state === 'done');
+    expect(await progress()).toMatchObject({ total: 14, done: 14, sessionIds: [] });
+    expect(await queue()).toBe(false);
   });
 });
