@@ -162,14 +162,18 @@ describe('quality', () => {
 });
 
 describe('a change that touches more than 500 sessions', () => {
+  let ownSquad: string;
+
   it('becomes a task that goes on where a crash left it, and does nothing twice', async () => {
-    const { athleteId } = await club.athlete(squadId, { name: 'Greta', memberFrom: '2020-01-01' });
+    ownSquad = await club.squad('Old hands');
+    manager = (await club.person([{ role: 'manager' }])).token;
+    const { athleteId } = await club.athlete(ownSquad, { name: 'Greta', memberFrom: '2020-01-01' });
     await enter(
       athleteId,
       threshold('lt1-power', 'rowing', 150, '2020-01-01'),
       threshold('critical-power', 'rowing', 240, '2020-01-01'),
     );
-    const first = await log(athleteId, powerSession('rowing', '2024-01-01'));
+    const first = await log(athleteId, { ...powerSession('rowing', '2024-01-01'), source: 'old' });
     await copySession(first, 599);
     const before = await weights();
     const answer = await enter(athleteId, threshold('critical-power', 'rowing', 255, '2021-01-01'));
@@ -209,6 +213,27 @@ describe('a change that touches more than 500 sessions', () => {
       [athleteId],
     );
     expect(sum).toEqual({ days: 600, load: 600 * 120 });
+  });
+
+  it('a policy that weighs them differently becomes one as well', async () => {
+    const before = await weights();
+    const settings = { weights: { moderate: 1, heavy: 2.5, severe: 3, extreme: 3 } };
+    const answer = await api('POST', `/v1/squads/${ownSquad}/policies`, { validFrom: '2024-02-01', settings });
+    const { task } = answer.body.reweighed;
+    expect(task).toMatchObject({ total: 600 - 31 });
+    await test.app.get(ReweighService, { strict: false }).processTask(club.clubId, task.id);
+    const done = (await api('GET', `/v1/reweighings/${task.id}`)).body;
+    expect(done).toMatchObject({ state: 'done', done: 569 });
+    expect((await changedSince(before)).toSorted()).toEqual(done.sessionIds.toSorted());
+    const loads = await rowsOf(
+      test.db.ownerUrl,
+      `select domain_load as load, count(*)::int as sessions from session_weight w join training_session s on s.id = w.session_id
+       where s.source = 'old' group by 1 order by 1`,
+    );
+    expect(loads).toEqual([
+      { load: 120, sessions: 31 },
+      { load: 150, sessions: 569 },
+    ]);
   });
 
   it('is found by those who may read thresholds, and by nobody of another club', async () => {

@@ -5,6 +5,7 @@ import { newId } from '../../platform/ids.ts';
 import { JobQueue } from '../../platform/job-queue.ts';
 import { UnitOfWork } from '../../platform/unit-of-work.ts';
 import type { Reweighed } from '../thresholds/threshold-change.types.ts';
+import { unweighedQuantities } from '../thresholds/thresholds.types.ts';
 import type { ThresholdChange } from '../thresholds/thresholds.types.ts';
 import { ReweighRepository } from './reweigh.repository.ts';
 import type { ReweighScope, ReweighTask } from './reweigh.repository.ts';
@@ -31,7 +32,9 @@ export class ReweighService {
 
   /** Inside the unit of work of the change, which holds the athlete. */
   async thresholdsChanged(athleteId: string, changes: readonly ThresholdChange[]): Promise<Reweighed> {
-    return this.start({ kind: 'thresholds', athleteId, changes });
+    const weighing = changes.filter(({ quantity }) => !unweighedQuantities.includes(quantity));
+    if (weighing.length === 0) return { sessionIds: [], task: null };
+    return this.start({ kind: 'thresholds', athleteId, changes: weighing });
   }
 
   /** Inside the unit of work of the change. */

@@ -39,6 +39,9 @@ export type Quantity = (typeof quantities)[number];
 /** Quantities of the athlete, whatever they train: kept with modality 'other' and setting 'any'. */
 export const athleteQuantities: readonly Quantity[] = ['resting-heart-rate', 'body-mass'];
 
+/** Quantities that are kept and shown, but weigh no session. */
+export const unweighedQuantities: readonly Quantity[] = ['vo2max', 'body-mass'];
+
 /** Unit and allowed range of each quantity; the database refuses the same. Ranges: own convention, wide on purpose. */
 export const quantityRanges: Readonly<Record<Quantity, { unit: string; min: number; max: number }>> = {
   'lt1-power': { unit: 'W', min: 20, max: 1000 },
