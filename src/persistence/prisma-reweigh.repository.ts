@@ -17,7 +17,7 @@ import {
   touchedByPolicy,
   touchedByThresholds,
 } from './sql/select-reweigh-candidates.sql.ts';
-import { updateQualities, updateWeights } from './sql/update-weights.sql.ts';
+import { updateQualities, updateWeights } from './sql/write-weights.sql.ts';
 
 @Injectable()
 export class PrismaReweighRepository extends ReweighRepository {

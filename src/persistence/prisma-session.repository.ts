@@ -15,10 +15,12 @@ import { currentScope, currentTransaction } from './prisma-unit-of-work.ts';
 import { toSession, toSessionRow, toWeight, toWeightRow } from './session-rows.ts';
 import { holdNames, holdWeighing } from './sql/hold-weighing.sql.ts';
 import type { WeighingHold } from './sql/hold-weighing.sql.ts';
+import { insertSessions } from './sql/insert-sessions.sql.ts';
 import { recomputeDailyTotals } from './sql/recompute-daily-totals.sql.ts';
 import { selectAthleteContexts } from './sql/select-athlete-contexts.sql.ts';
 import { selectKnownExternalIds } from './sql/select-known-external-ids.sql.ts';
 import { selectMinutesOfDays } from './sql/select-minutes-of-days.sql.ts';
+import { insertWeights } from './sql/write-weights.sql.ts';
 
 /** With more days of one athlete than this, the whole athlete is held: a server has room for few thousand locks. */
 const DAYS_HELD_SINGLY = 7;
@@ -72,10 +74,12 @@ export class PrismaSessionRepository extends SessionsRepository {
   async insert(sessions: readonly (SessionRecord & { weight: StoredWeight })[]): Promise<void> {
     const tx = currentTransaction();
     const { clubId } = currentScope();
-    await tx.trainingSession.createMany({
-      data: sessions.map(({ weight: _, ...session }) => toSessionRow(clubId, session)),
-    });
-    await tx.sessionWeight.createMany({ data: sessions.map(({ id, weight }) => toWeightRow(clubId, id, weight)) });
+    const rows = sessions.map(({ weight: _, ...session }) => toSessionRow(clubId, session));
+    await insertSessions(tx, rows);
+    await insertWeights(
+      tx,
+      sessions.map(({ id, weight }) => toWeightRow(clubId, id, weight)),
+    );
   }
 
   async replace({ weight, ...session }: WeighedSession, expectedVersion: number): Promise<boolean> {

@@ -49,9 +49,10 @@ export async function recomputeDailyTotals(
       coalesce(sum(w.severe_min order by w.id), 0), coalesce(sum(w.extreme_min order by w.id), 0),
       coalesce(sum(w.duration_min order by w.id) filter (where w.domain_state <> 'not-applicable'), 0),
       coalesce(sum(w.covered_min order by w.id), 0),
-      coalesce((select b.basis_minutes from by_basis b where b.athlete_id = w.athlete_id and b.day = w.day), '{}'::jsonb),
+      coalesce((array_agg(b.basis_minutes))[1], '{}'::jsonb),
       count(*) filter (where w.quality = 'suspect')
-    from weighed w group by w.club_id, w.athlete_id, w.day
+    from weighed w left join by_basis b on b.athlete_id = w.athlete_id and b.day = w.day
+    group by w.club_id, w.athlete_id, w.day
     on conflict (club_id, athlete_id, day) do update set
       sessions = excluded.sessions, minutes = excluded.minutes, rating_load = excluded.rating_load,
       rating_missing = excluded.rating_missing, domain_load = excluded.domain_load,

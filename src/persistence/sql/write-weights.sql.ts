@@ -1,5 +1,20 @@
 import type { Prisma } from '../generated/client.ts';
 
+/** Inserts the weights of new sessions in one statement; the rows are those of `toWeightRow`. */
+export async function insertWeights(tx: Prisma.TransactionClient, rows: readonly object[]): Promise<void> {
+  await tx.$executeRaw`
+    insert into session_weight (club_id, session_id, rating_load, domain_state, domain_reason, domain_load, moderate_min,
+      heavy_min, severe_min, extreme_min, unassigned_min, basis, measures, thresholds_used, policy_id, method_version,
+      weighed_at)
+    select n."clubId", n."sessionId", n."ratingLoad", n."domainState", n."domainReason", n."domainLoad",
+      n."moderateMin", n."heavyMin", n."severeMin", n."extremeMin", n."unassignedMin", n.basis, n.measures,
+      n."thresholdsUsed", n."policyId", n."methodVersion", n."weighedAt"
+    from jsonb_to_recordset(${JSON.stringify(rows)}::jsonb) as n ("clubId" uuid, "sessionId" uuid, "ratingLoad" float8,
+      "domainState" text, "domainReason" text, "domainLoad" float8, "moderateMin" float8, "heavyMin" float8,
+      "severeMin" float8, "extremeMin" float8, "unassignedMin" float8, basis text, measures jsonb,
+      "thresholdsUsed" jsonb, "policyId" uuid, "methodVersion" text, "weighedAt" timestamptz)`;
+}
+
 /** Rewrites the weights of several sessions; the rows are those of `toWeightRow`. */
 export async function updateWeights(tx: Prisma.TransactionClient, rows: readonly object[]): Promise<void> {
   if (rows.length === 0) return;
