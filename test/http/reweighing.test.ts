@@ -3,6 +3,7 @@ import { ReweighRepository } from '../../src/features/sessions/reweigh.repositor
 import { ReweighService } from '../../src/features/sessions/reweigh.service.ts';
 import { startTestApp } from '../support/app.ts';
 import type { TestApp, TestClub } from '../support/app.ts';
+import { copySession } from '../support/copy-session.ts';
 import { rowsOf } from '../support/rows.ts';
 
 let test: TestApp;
@@ -146,6 +147,30 @@ describe('three athletes, two modalities, three values each', () => {
   });
 });
 
+describe('a value entered while sessions are being logged', () => {
+  it('weighs every one of them, whichever comes first', async () => {
+    const { athleteId } = await club.athlete(squadId, { name: 'Frida' });
+    await enter(
+      athleteId,
+      threshold('lt1-power', 'rowing', 150, '2026-01-01'),
+      threshold('critical-power', 'rowing', 240, '2026-01-01'),
+    );
+    const days = Array.from({ length: 12 }, (_, index) => `2026-02-${String(index + 1).padStart(2, '0')}`);
+    const logs = days.map((day) => log(athleteId, powerSession('rowing', day)));
+    const late = enter(athleteId, threshold('critical-power', 'rowing', 255, '2026-01-20'));
+    const policy = api('POST', `/v1/squads/${squadId}/policies`, {
+      validFrom: '2026-02-27',
+      settings: { weights: { moderate: 1, heavy: 2, severe: 3, extreme: 3 } },
+    });
+    const [ids, entered, changed] = [await Promise.all(logs), await late, await policy];
+    expect([entered.status, changed.status]).toEqual([201, 201]);
+    const used = await Promise.all(ids.map(async (id) => (await api('GET', `/v1/sessions/${id}`)).body.weight));
+    for (const { thresholdsUsed } of used) {
+      expect(thresholdsUsed).toContainEqual(expect.objectContaining({ quantity: 'critical-power', value: 255 }));
+    }
+  });
+});
+
 describe('quality', () => {
   it('is judged anew with the values it was judged by', async () => {
     const { athleteId } = await club.athlete(squadId, { name: 'Hedda' });
@@ -174,7 +199,7 @@ describe('a change that touches more than 500 sessions', () => {
       threshold('critical-power', 'rowing', 240, '2020-01-01'),
     );
     const first = await log(athleteId, { ...powerSession('rowing', '2024-01-01'), source: 'old' });
-    await copySession(first, 599);
+    await copySession(test.db.ownerUrl, first, 599);
     const before = await weights();
     const answer = await enter(athleteId, threshold('critical-power', 'rowing', 255, '2021-01-01'));
     expect(answer.body.reweighed).toEqual({ sessionIds: [], task: { id: expect.any(String), total: 600 } });
@@ -242,43 +267,3 @@ describe('a change that touches more than 500 sessions', () => {
     expect((await test.api('GET', `/v1/reweighings/${task!.id}`, { token: other.adminToken })).status).toBe(404);
   });
 });
-
-/** The same session on the days after, with its weight and day's sums, without asking 599 times. */
-async function copySession(id: string, times: number): Promise<void> {
-  const columns = async (table: string) =>
-    (
-      await rowsOf<{ name: string }>(
-        test.db.ownerUrl,
-        `select column_name as name from information_schema.columns where table_name = $1 and table_schema = 'public'`,
-        [table],
-      )
-    ).map(({ name }) => name);
-  const list = (names: string[], instead: Record<string, string>) =>
-    names.map((name) => instead[name] ?? `o.${name}`).join();
-  const newId = `('0198f3a0-0000-7000-8000-' || lpad(to_hex(n), 12, '0'))::uuid`;
-  const session = await columns('training_session');
-  await rowsOf(
-    test.db.ownerUrl,
-    `insert into training_session (${session.join()}) select ${list(session, {
-      id: newId,
-      training_day: 'o.training_day + n',
-      started_at: `o.started_at + n * interval '1 day'`,
-    })} from training_session o, generate_series(1, $2::int) n where o.id = $1`,
-    [id, times],
-  );
-  const weight = await columns('session_weight');
-  await rowsOf(
-    test.db.ownerUrl,
-    `insert into session_weight (${weight.join()}) select ${list(weight, { session_id: newId })}
-     from session_weight o, generate_series(1, $2::int) n where o.session_id = $1`,
-    [id, times],
-  );
-  const total = await columns('daily_total');
-  await rowsOf(
-    test.db.ownerUrl,
-    `insert into daily_total (${total.join()}) select ${list(total, { day: 'o.day + n' })}
-     from daily_total o join training_session s on s.athlete_id = o.athlete_id and s.training_day = o.day,
-       generate_series(1, $2::int) n where s.id = $1`,
-    [id, times],
-  );
-}

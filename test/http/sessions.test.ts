@@ -135,6 +135,20 @@ describe('logging', () => {
   });
 });
 
+describe('two at the same moment', () => {
+  it('the same name from one source, on different days: the database keeps one and says which field', async () => {
+    const days = ['21', '22', '23', '24', '25', '26'];
+    const answers = await Promise.all(
+      days.map((day) => {
+        const body = session(`2026-02-${day}T07:00:00+01:00`, { source: 'watch', externalId: 'raced' });
+        return call('POST', `/v1/athletes/${athleteId}/sessions`, body);
+      }),
+    );
+    expect(answers.map(({ status }) => status).toSorted()).toEqual([201, 409, 409, 409, 409, 409]);
+    for (const { status, body } of answers) if (status === 409) expect(body.errors[0].field).toBe('externalId');
+  });
+});
+
 describe('correcting and withdrawing', () => {
   it('needs the version: 428 without, 412 with an old one, 400 with something else', async () => {
     const { id } = await log('2026-02-12T07:00:00+01:00', { rating: 5 });
