@@ -51,10 +51,7 @@ export default tseslint.config(
       '@typescript-eslint/no-unsafe-return': 'off',
     },
   },
-  {
-    files: ['**/*.mjs'],
-    ...tseslint.configs.disableTypeChecked,
-    languageOptions: { globals: { process: 'readonly', URL: 'readonly', console: 'readonly' } },
-  },
+  { files: ['**/*.mjs'], ...tseslint.configs.disableTypeChecked },
+  { files: ['**/*.mjs'], languageOptions: { globals: { process: 'readonly', URL: 'readonly', console: 'readonly' } } },
   prettier,
 );
