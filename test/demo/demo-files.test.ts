@@ -14,22 +14,16 @@ import { scenarioDays } from './support/scenario-days.ts';
 import { viewOn } from './support/scenario-flags.ts';
 
 const tuesday = '2026-12-01';
-const clockChange = '2026-10-25';
 const workbookName = 'loadweir-senior-rowers-2026-W48-v1.xlsx';
 let output: DemoOutput;
-let other: DemoOutput;
 let files: Files;
 
 beforeAll(async () => {
   output = await runDemo('--today', tuesday);
   files = readFiles(output.folder);
-  other = await runDemo('--today', clockChange);
 }, 300_000);
 
-afterAll(() => {
-  output.remove();
-  other.remove();
-});
+afterAll(() => output.remove());
 
 /** The difference in units of the tolerance: 1e-6 of the value, or of 1. */
 function off(shown: number | null | undefined, computed: number): number {
@@ -131,12 +125,6 @@ describe('the files of a run', () => {
     for (const { key, flags, ratio } of files.summary.athletes) {
       if (quiet.has(key)) expect({ key, flags, shown: ratio.value !== null }).toEqual({ key, flags: [], shown: true });
     }
-  });
-
-  test('are the same, counted back from the last Sunday, on the day the clocks change', () => {
-    const { summary } = readFiles(other.folder);
-    expect(summary.asOf).toBe('2026-10-18');
-    expect(flagsOf(summary)).toEqual(flagsOf(files.summary));
   });
 });
 

@@ -2,8 +2,16 @@ import { readdirSync, readFileSync, statSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterEach, expect, test } from '@jest/globals';
 import pg from 'pg';
+import { dayNumber } from '../../src/core/series/day.ts';
+import { scenario } from '../../src/demo/scenario.ts';
 import { startEmbedded } from '../../src/platform/embedded/start-embedded.ts';
 import { command, descendants, isAlive, temporaryFolder } from '../commands/support/command.ts';
+import { scenarioDays } from './support/scenario-days.ts';
+import { viewOn } from './support/scenario-flags.ts';
+
+/** The clocks go back in the squad's zone in the night before; the last complete week ended a week ago. */
+const clockChange = '2026-10-25';
+const lastSunday = '2026-10-18';
 
 const cleanUp: (() => Promise<void> | void)[] = [];
 afterEach(async () => {
@@ -12,7 +20,7 @@ afterEach(async () => {
 
 /** Runs the demo until it stands, then presses Ctrl-C. */
 async function runOnce(env: Record<string, string>): Promise<string> {
-  const demo = command('src/commands/demo.js', ['--today', '2026-12-01'], env);
+  const demo = command('src/commands/demo.js', ['--today', clockChange], env);
   cleanUp.push(async () => {
     for (const pid of [demo.pid, ...descendants(demo.pid)]) if (isAlive(pid)) process.kill(pid, 'SIGKILL');
     await demo.finished;
@@ -53,6 +61,25 @@ async function rowCounts(dataDir: string): Promise<Record<string, number>> {
   }
 }
 
+/** "name: kind days" of each flag told, counted back from the last Sunday. */
+function toldFlags(output: string): string[] {
+  const lines = output.matchAll(/^ {2}note +(.+?) {2,}([a-z-]+) since (\d{4}-\d{2}-\d{2}): /gm);
+  return [...lines]
+    .map(([, name, kind, since]) => `${name}: ${kind} ${dayNumber(lastSunday) - dayNumber(since!)}`)
+    .sort();
+}
+
+/** What the core's rules say of the scenario laid out for another day, a Tuesday. */
+function expectedFlags(): string[] {
+  const one = scenario(1, '2026-12-01');
+  const flags = one.athletes.flatMap(({ key, name }) =>
+    viewOn(one, key, scenarioDays(one, key), 84).flags.map(({ kind, sinceDaysAgo }) => {
+      return `${name}: ${kind === 'within' ? 'planned-overload' : kind} ${sinceDaysAgo}`;
+    }),
+  );
+  return flags.sort();
+}
+
 test('a second run on the same day logs nothing twice and sends nothing twice', async () => {
   const folder = temporaryFolder();
   cleanUp.push(() => folder.remove());
@@ -62,6 +89,8 @@ test('a second run on the same day logs nothing twice and sends nothing twice', 
   const sent = mails().map((name) => ({ name, content: readFileSync(join(env.OUTBOX_DIR, name)) }));
   expect(sent).toHaveLength(1);
   expect(first).not.toContain('already sent');
+  expect(expectedFlags().length).toBeGreaterThan(4);
+  expect(toldFlags(first)).toEqual(expectedFlags());
   expect(statSync(join(env.DATA_DIR, 'demo', 'tokens.json')).mode & 0o777).toBe(0o600);
   const before = await rowCounts(env.DATA_DIR);
   expect(before.training_session).toBeGreaterThan(1000);

@@ -47,6 +47,7 @@ export function viewOn(scenario: Scenario, athlete: string, all: readonly Scenar
   const back = returnPhase(
     log.map(({ day, unavailable }, index) => ({ day, unavailable, chronic: windows.chronic[index]! })),
   );
+  const planned = overloads(scenario, athlete);
   const figures = log.map((day, index) => {
     const week = index < 6 ? [NaN] : values.slice(index - 6, index + 1);
     const monotony = monotonyPopulation(week);
@@ -59,13 +60,13 @@ export function viewOn(scenario: Scenario, athlete: string, all: readonly Scenar
         week.reduce((a, b) => a + b, 0),
         monotony,
       ),
-      muted: mutingOn(scenario, athlete, day, back[index] !== null),
+      muted: mutingOn(scenario, planned, day, back[index] !== null),
       spike: spikeOn(log, index),
     };
   });
   const open = (kind: string, stretches: readonly { since: number; until: number | null }[]) =>
     stretches.filter(({ until }) => until === null).map(({ since }) => ({ kind, sinceDaysAgo: sunday - since }));
-  const phase = plannedOverloadPhase(sunday, overloads(scenario, athlete));
+  const phase = plannedOverloadPhase(sunday, planned);
   return {
     measure,
     ratio: figures.at(-1)!.ratio,
@@ -109,13 +110,13 @@ function overloads(scenario: Scenario, athlete: string) {
 
 function mutingOn(
   scenario: Scenario,
-  athlete: string,
+  planned: ReturnType<typeof overloads>,
   { day, unavailable }: ScenarioDay,
   back: boolean,
 ): Muting | null {
   if (unavailable) return 'unavailable';
   if (back) return 'return';
-  if (plannedOverloadPhase(day, overloads(scenario, athlete))?.phase === 'within') return 'planned-overload';
+  if (plannedOverloadPhase(day, planned)?.phase === 'within') return 'planned-overload';
   const unload = scenario.loadPeriods.some(
     ({ purpose, from, to }) => purpose === 'unload' && dayNumber(from) <= day && day <= dayNumber(to),
   );
@@ -133,15 +134,14 @@ function spikeOn(log: readonly ScenarioDay[], index: number) {
 /** Age of the newest threshold of the trained modality whose newest threshold is oldest. */
 function ages(scenario: Scenario, athlete: string, log: readonly ScenarioDay[]) {
   const entries = scenario.thresholds.filter((batch) => batch.athlete === athlete).flatMap(({ values }) => values);
+  const tested = Map.groupBy(
+    entries.map(({ modality, validFrom }) => ({ modality, from: dayNumber(validFrom) })),
+    ({ modality }) => modality ?? 'other',
+  );
   return log.map(({ day }, index) => {
     const trained = new Set(log.slice(Math.max(0, index - 27), index + 1).flatMap((one) => [...one.modalities]));
     const newest = [...trained].map((modality) =>
-      Math.max(
-        ...entries
-          .filter((entry) => entry.modality === modality)
-          .map(({ validFrom }) => dayNumber(validFrom))
-          .filter((from) => from <= day),
-      ),
+      Math.max(...(tested.get(modality) ?? []).map(({ from }) => from).filter((from) => from <= day)),
     );
     return { day, ageDays: newest.length === 0 ? NaN : day - Math.min(...newest) };
   });
