@@ -28,6 +28,9 @@ The embedded database under DATA_DIR and the outbox folder are used whatever DAT
 API's port; without it a free one is taken. Running it again with the same date and number logs and sends nothing twice.
 `;
 
+/** A service ended by itself. */
+class ServiceFailure extends Error {}
+
 await runCommand(async (given) => {
   const args = parseArguments(given);
   if (args.help) {
@@ -55,15 +58,16 @@ await runCommand(async (given) => {
     await orFailed(new Promise<void>((done) => stop.signal.addEventListener('abort', () => done())), services, stop);
     return 0;
   } catch (error) {
-    if (stop.signal.aborted && !(error instanceof ServiceFailure)) return args.exit ? 130 : 0;
+    if (stop.signal.aborted && !(error instanceof ServiceFailure)) {
+      note('Stopped before it was finished.');
+      return 130;
+    }
     throw error instanceof LostKeysError ? new UsageError(error.message) : error;
   } finally {
     await services?.stop();
     await database?.remove();
   }
 });
-
-class ServiceFailure extends Error {}
 
 /** The work, unless a service ends by itself before: then nothing more can be expected of it. */
 async function orFailed<T>(work: Promise<T>, services: RunningServices, stop: AbortController): Promise<T> {

@@ -47,12 +47,13 @@ export function summaryOf(
 
 function athlete(key: string, measures: AthleteMeasures) {
   const { longLoad, shortLoad } = measures;
+  const { moderate, heavy, severe, extreme } = measures.domainMinutes;
   return {
     key,
     name: measures.name,
     primaryMeasure: measures.primaryMeasure,
     primaryReason: measures.primaryReason,
-    domainMinutes: measures.domainMinutes,
+    domainMinutes: { moderate, heavy, severe, extreme },
     domainLoad: { ...figure(measures.domainLoad.week), knownDays: measures.domainLoad.weekKnownDays },
     domainLoad28: { ...figure(measures.domainLoad.last28), knownDays: measures.domainLoad.last28KnownDays },
     ratingLoad: { ...figure(measures.ratingLoad.week), knownDays: measures.ratingLoad.weekKnownDays },
