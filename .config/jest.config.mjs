@@ -18,6 +18,8 @@ export default {
   globalTeardown: '<rootDir>/test/support/global-teardown.ts',
   reporters: ['default', '<rootDir>/.config/jest-last-line.mjs'],
   testTimeout: 60_000,
-  maxWorkers: 2,
+  // One more than two cores: files that wait for processes, heartbeats and locks leave time to the others.
+  maxWorkers: 3,
+  testSequencer: '<rootDir>/.config/jest-long-first.mjs',
   workerIdleMemoryLimit: '1200MB',
 };
