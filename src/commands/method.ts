@@ -1,11 +1,12 @@
 import { readFileSync } from 'node:fs';
-import { catalogue } from '../core/catalogue.ts';
+import { catalogue, methodsTable } from '../core/catalogue.ts';
 import type { Method } from '../core/catalogue.ts';
 import { NumericInputError } from '../core/numeric-input-error.ts';
 
 const HELP = `Lists the numeric methods and runs one of them.
 
   npm run -s method -- --list [--json]          all methods: id, inputs with units, unit of the result, source
+  npm run -s method -- --table                  the methods table of the README
   npm run -s method -- ID                       one method
   npm run -s method -- ID --input FILE.json     its result as JSON
   npm run -s method -- --help                   this text
@@ -21,6 +22,7 @@ function main(args: readonly string[]): string {
   const { flags, id, file } = parse(args);
   if (flags.has('--help') || args.length === 0) return HELP;
   if (flags.has('--list')) return flags.has('--json') ? json(catalogue.map(described)) : listing(catalogue);
+  if (flags.has('--table')) return `${methodsTable()}\n`;
   const method = find(id);
   if (file === undefined) return flags.has('--json') ? json(described(method)) : listing([method]);
   return json(method.run(readObject(file)));
@@ -36,10 +38,12 @@ function parse(args: readonly string[]): { flags: Set<string>; id: string | unde
       i += 1;
       file = args[i];
       if (file === undefined) throw new UsageError('--input: a file name is missing');
-    } else if (['--list', '--json', '--help'].includes(argument)) {
+    } else if (['--list', '--table', '--json', '--help'].includes(argument)) {
       flags.add(argument);
     } else if (argument.startsWith('-') || id !== undefined) {
-      throw new UsageError(`unknown argument ${argument}; allowed: ID, --input FILE.json, --list, --json, --help`);
+      throw new UsageError(
+        `unknown argument ${argument}; allowed: ID, --input FILE.json, --list, --table, --json, --help`,
+      );
     } else {
       id = argument;
     }

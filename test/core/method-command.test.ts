@@ -4,7 +4,7 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { afterAll, expect, test } from '@jest/globals';
-import { catalogue } from '../../src/core/catalogue.ts';
+import { catalogue, methodsTable } from '../../src/core/catalogue.ts';
 
 const script = fileURLToPath(new URL('../../src/commands/method.ts', import.meta.url));
 const folder = mkdtempSync(join(tmpdir(), 'loadweir-method-'));
@@ -32,6 +32,10 @@ test('lists every id with inputs, unit and source, also as JSON', () => {
   const described = JSON.parse(method('--list', '--json').stdout) as { id: string; inputs: unknown[] }[];
   expect(described.map(({ id }) => id)).toEqual(catalogue.map(({ id }) => id));
   expect(described[0]!.inputs[0]).toEqual({ name: 'rating', unit: 'CR-10 units, 0 to 10', kind: 'number' });
+});
+
+test('prints the methods table of the README', () => {
+  expect(method('--table').stdout.trim()).toBe(methodsTable().trim());
 });
 
 test('runs a method on a file and prints JSON; an undefined result is null', () => {
