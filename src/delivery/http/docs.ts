@@ -16,8 +16,12 @@ export function serveDocs(app: NestFastifyApplication): void {
     .addBearerAuth({ type: 'http', scheme: 'bearer', description: 'A person’s access token: lw.…' })
     .addBearerAuth({ type: 'http', scheme: 'bearer', description: 'The operator’s key' }, 'operator')
     .build();
-  const document = SwaggerModule.createDocument(app, description);
-  for (const [path, item] of Object.entries(document.paths)) sayWhatAllShare(path, item);
+  // Made when first asked for: most starts of the service never are.
+  const document = () => {
+    const made = SwaggerModule.createDocument(app, description);
+    for (const [path, item] of Object.entries(made.paths)) sayWhatAllShare(path, item);
+    return made;
+  };
   SwaggerModule.setup('docs', app, document, {
     jsonDocumentUrl: 'docs/json',
     raw: ['json'],
