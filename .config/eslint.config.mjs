@@ -29,7 +29,7 @@ export default tseslint.config(
   },
   {
     files: ['src/**/*.ts', 'jobs/**/*.ts', 'reports/**/*.ts', 'prisma/**/*.ts'],
-    ignores: ['src/platform/env.ts', 'src/platform/embedded/**', 'src/commands/**', 'prisma/prisma.config.ts'],
+    ignores: ['src/platform/env.ts', 'src/platform/embedded/**', 'prisma/prisma.config.ts'],
     rules: {
       'no-restricted-syntax': [
         'error',

@@ -1,9 +1,9 @@
 import { resolve } from 'node:path';
 import { LostKeysError } from '../demo/found-club.ts';
-import { readEnv } from '../platform/env.ts';
+import { readEnvAs } from '../platform/env.ts';
 import { parseArguments } from './demo/arguments.ts';
 import type { DemoArguments } from './demo/arguments.ts';
-import { demoEnvironment, takeOver } from './demo/demo-environment.ts';
+import { demoEnvironment } from './demo/demo-environment.ts';
 import { runDemo } from './demo/run-demo.ts';
 import { throwAwayDatabase } from './demo/throw-away-database.ts';
 import type { ThrowAwayDatabase } from './demo/throw-away-database.ts';
@@ -45,8 +45,7 @@ await runCommand(async (given) => {
   let database: ThrowAwayDatabase | undefined;
   try {
     if (args.exit) database = await throwAwayDatabase(note);
-    takeOver(environmentOf(args, database));
-    const env = readEnv(process.env);
+    const env = readEnvAs((given) => environmentOf(given, args, database));
     services = await startServices(env, { log: note, signal: stop.signal });
     const run = { url: services.url, operatorKey: services.operator.key, env, signal: stop.signal, say };
     const club = await orFailed(runDemo(args, run), services, stop);
@@ -80,8 +79,12 @@ async function orFailed<T>(work: Promise<T>, services: RunningServices, stop: Ab
   return Promise.race([work, failed]);
 }
 
-function environmentOf(args: DemoArguments, database: ThrowAwayDatabase | undefined): NodeJS.ProcessEnv {
-  const environment = demoEnvironment(process.env, args, {
+function environmentOf(
+  given: NodeJS.ProcessEnv,
+  args: DemoArguments,
+  database: ThrowAwayDatabase | undefined,
+): NodeJS.ProcessEnv {
+  const environment = demoEnvironment(given, args, {
     ...(database === undefined ? {} : { data: database.folder }),
     ...(args.out === undefined ? {} : { outbox: resolve(args.out) }),
   });

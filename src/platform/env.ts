@@ -61,6 +61,28 @@ export function readEnv(source: NodeJS.ProcessEnv = process.env): Env {
   return { ...env, LOADWEIR_CLOCK_OFFSET_MS: env.LOADWEIR_CLOCK_OFFSET_MS ?? offsetTo(env.LOADWEIR_FIXED_TODAY) };
 }
 
+/** The environment read as `change` leaves it. @throws {EnvError} naming all bad variables. */
+export function readEnvAs(change: (given: NodeJS.ProcessEnv) => NodeJS.ProcessEnv): Env {
+  return readEnv(change(process.env));
+}
+
+/**
+ * What a service started from here gets: the environment as it was read, with the connection of the role that owns
+ * nothing, never the owner's, and the same clock.
+ */
+export function serviceEnvironment(env: Env, changes: NodeJS.ProcessEnv): NodeJS.ProcessEnv {
+  const read = Object.entries(env).map(([name, value]) => [name, value === undefined ? undefined : String(value)]);
+  const asRead = Object.fromEntries(read) as NodeJS.ProcessEnv;
+  return {
+    ...process.env,
+    ...asRead,
+    DATABASE_URL: undefined,
+    LOADWEIR_FIXED_TODAY: undefined,
+    TZ: 'UTC',
+    ...changes,
+  };
+}
+
 function refusedInProduction(given: NodeJS.ProcessEnv): { variable: string; message: string }[] {
   return ['LOADWEIR_FIXED_TODAY', 'LOADWEIR_CLOCK_OFFSET_MS']
     .filter((variable) => (given[variable] ?? '0') !== '0')

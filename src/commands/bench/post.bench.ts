@@ -4,6 +4,7 @@ import { tmpdir } from 'node:os';
 import { extname, join } from 'node:path';
 import pg from 'pg';
 import { prepareDatabase } from '../../../prisma/prepare.ts';
+import { readEnv, serviceEnvironment } from '../../platform/env.ts';
 import { startEmbedded } from '../../platform/embedded/start-embedded.ts';
 import { ServiceProcess } from '../start/service-process.ts';
 import type { Bench } from './bench.types.ts';
@@ -37,15 +38,9 @@ export const postBench: Bench = {
     const key = randomBytes(24).toString('base64url');
     try {
       const { appUrl } = await prepareDatabase({ ownerUrl: database.ownerUrl });
-      const { DATABASE_URL: _, ...inherited } = process.env;
-      const api = new ServiceProcess('API', new URL(`../../main${extname(import.meta.url)}`, import.meta.url), {
-        ...inherited,
-        TZ: 'UTC',
-        PORT: '0',
-        LOG_LEVEL: 'warn',
-        DATABASE_APP_URL: appUrl,
-        LOADWEIR_OPERATOR_KEY: key,
-      });
+      const changes = { PORT: '0', LOG_LEVEL: 'warn', DATABASE_APP_URL: appUrl, LOADWEIR_OPERATOR_KEY: key };
+      const entry = new URL(`../../main${extname(import.meta.url)}`, import.meta.url);
+      const api = new ServiceProcess('API', entry, serviceEnvironment(readEnv(), changes));
       try {
         const { url } = await api.ready();
         return await measure(await setUp(url!, key), appUrl, log);

@@ -30,9 +30,3 @@ export function demoEnvironment(
     ...(outbox === undefined ? {} : { OUTBOX_DIR: outbox }),
   };
 }
-
-/** Makes it this process's environment, which the services inherit. */
-export function takeOver(environment: NodeJS.ProcessEnv): void {
-  for (const name of Object.keys(process.env)) if (environment[name] === undefined) delete process.env[name];
-  for (const [name, value] of Object.entries(environment)) if (value !== undefined) process.env[name] = value;
-}

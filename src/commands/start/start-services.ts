@@ -1,4 +1,5 @@
 import { extname } from 'node:path';
+import { serviceEnvironment } from '../../platform/env.ts';
 import type { Env } from '../../platform/env.ts';
 import { openDatabase } from '../support/open-database.ts';
 import { operatorKey } from './operator-key.ts';
@@ -34,7 +35,7 @@ export async function startServices(env: Env, { log, signal }: StartOptions): Pr
   };
   try {
     signal?.throwIfAborted();
-    const childEnv = environment(database.env, operator.key);
+    const childEnv = serviceEnvironment(database.env, { LOADWEIR_OPERATOR_KEY: operator.key });
     const api = new ServiceProcess('API', entry('../../main'), childEnv);
     const worker = new ServiceProcess('worker', entry('../../../jobs/main'), childEnv);
     services = [api, worker];
@@ -49,18 +50,6 @@ export async function startServices(env: Env, { log, signal }: StartOptions): Pr
     await stop();
     throw error;
   }
-}
-
-/** The services get the connection of the role that owns nothing, never the owner's. */
-function environment(env: Env, key: string): NodeJS.ProcessEnv {
-  const { DATABASE_URL: _, ...rest } = process.env;
-  return {
-    ...rest,
-    TZ: 'UTC',
-    DATABASE_APP_URL: env.DATABASE_APP_URL,
-    LOADWEIR_OPERATOR_KEY: key,
-    ...(env.LOADWEIR_CLOCK_OFFSET_MS === 0 ? {} : { LOADWEIR_CLOCK_OFFSET_MS: String(env.LOADWEIR_CLOCK_OFFSET_MS) }),
-  };
 }
 
 /** From source and from the build alike. */
