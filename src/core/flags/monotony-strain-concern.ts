@@ -28,14 +28,14 @@ export function monotonyStrainConcern(days: readonly LoadConcernDay[], settings:
   // For every day the strains of the Sundays before it, newest last.
   const before: number[][] = [];
   let strains: number[] = [];
-  for (const { day, strain } of days) {
+  for (const { strain, day } of days) {
     before.push(strains);
     if (weekday(day) === SUNDAY && !Number.isNaN(strain)) strains = [...strains, strain].slice(-BLOCKS);
   }
   return stretches(
     days,
     (index) => {
-      const { day, monotony, strain, muted } = days[index]!;
+      const { monotony, strain, muted, day } = days[index]!;
       if (MUTED_BY.includes(muted)) return { kind: 'muted' };
       const earlier = before[index]!;
       const judged = weekday(day) === SUNDAY && !Number.isNaN(monotony) && !Number.isNaN(strain);
@@ -46,7 +46,7 @@ export function monotonyStrainConcern(days: readonly LoadConcernDay[], settings:
         raised: monotony > monotonyLimit && strain > strainLimit,
         inside: monotony <= clearFactor * monotonyLimit || strain <= clearFactor * strainLimit,
         strength: Math.min(monotony / monotonyLimit, strainLimit > 0 ? strain / strainLimit : Infinity),
-        evidence: { measure: 'monotony-strain', value: monotony, limit: monotonyLimit, day, strain, strainLimit },
+        evidence: { measure: 'monotony-strain', value: monotony, limit: monotonyLimit, strain, strainLimit, day },
       };
     },
     1,
