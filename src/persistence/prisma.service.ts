@@ -3,6 +3,7 @@ import type { OnApplicationShutdown, OnModuleInit } from '@nestjs/common';
 import pg from 'pg';
 import { UnavailableError } from '../platform/errors.ts';
 import { PrismaClient } from './generated/client.ts';
+import { statementNames } from './statement-names.ts';
 
 export interface PrismaServiceOptions {
   /** Connection of the role that owns nothing. */
@@ -30,7 +31,11 @@ export class PrismaService implements OnModuleInit, OnApplicationShutdown {
     });
     this.#pool.on('error', noticed);
     this.client = new PrismaClient({
-      adapter: new PrismaPg(this.#pool, { onPoolError: noticed, onConnectionError: noticed }),
+      adapter: new PrismaPg(this.#pool, {
+        onPoolError: noticed,
+        onConnectionError: noticed,
+        statementNameGenerator: statementNames(),
+      }),
     });
   }
 
