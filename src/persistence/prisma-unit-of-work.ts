@@ -47,10 +47,9 @@ export class PrismaUnitOfWork extends UnitOfWork {
     if (outer === undefined || !outer.open) return this.begin({ scope, operator: false }, work);
     if (outer.scope === null) return enterClub(outer, scope, work);
     if (outer.scope.clubId !== scope.clubId) throw new Error('a unit of work cannot reach into a second club');
-    if (scope.personId !== null && scope.personId !== outer.scope.personId) {
-      throw new Error('a unit of work cannot change the person it runs for');
-    }
-    return work();
+    if (scope.personId === null || scope.personId === outer.scope.personId) return work();
+    if (outer.scope.personId !== null) throw new Error('a unit of work cannot change the person it runs for');
+    return inside({ ...outer, scope }, work);
   }
 
   async runAsOperator<T>(work: () => Promise<T>): Promise<T> {
@@ -64,7 +63,6 @@ export class PrismaUnitOfWork extends UnitOfWork {
     try {
       return await this.prisma.client.$transaction(async (tx) => {
         await tx.$queryRaw`select set_config('loadweir.club_id', ${unit.scope?.clubId ?? ''}, true),
-          set_config('loadweir.person_id', ${unit.scope?.personId ?? ''}, true),
           set_config('loadweir.operator', ${unit.operator ? 'on' : ''}, true)`;
         return inside({ ...unit, tx, open: true }, work);
       }, limits);
@@ -85,8 +83,7 @@ async function inside<T>(unit: Running, work: () => Promise<T>): Promise<T> {
 /** The operator's transaction looks at one club for a while. */
 async function enterClub<T>(outer: Running, scope: WorkScope, work: () => Promise<T>): Promise<T> {
   const { tx } = outer;
-  await tx.$queryRaw`select set_config('loadweir.club_id', ${scope.clubId}, true),
-    set_config('loadweir.person_id', ${scope.personId ?? ''}, true)`;
+  await tx.$queryRaw`select set_config('loadweir.club_id', ${scope.clubId}, true)`;
   let result: T;
   try {
     result = await inside({ tx, scope, operator: true, open: true }, work);
@@ -100,5 +97,5 @@ async function enterClub<T>(outer: Running, scope: WorkScope, work: () => Promis
 }
 
 async function leaveClub(tx: Prisma.TransactionClient): Promise<void> {
-  await tx.$queryRaw`select set_config('loadweir.club_id', '', true), set_config('loadweir.person_id', '', true)`;
+  await tx.$queryRaw`select set_config('loadweir.club_id', '', true)`;
 }

@@ -12,7 +12,8 @@ export interface WorkScope {
 export abstract class UnitOfWork {
   /**
    * Runs `work` in one transaction that sees one club's rows. A nested call for the same club joins the transaction
-   * under way; one for another club, or for a person other than the one it runs for, is refused.
+   * under way, and may name the person of one that runs for nobody yet; one for another club, or for a person other
+   * than the one it runs for, is refused.
    */
   abstract run<T>(scope: WorkScope, work: () => Promise<T>): Promise<T>;
 

@@ -75,9 +75,8 @@ describe('run', () => {
   test('tells the database for whom it works, and leaves nothing of that on the connection', async () => {
     const person = randomUUID();
     const read = () => currentTransaction().$queryRaw`
-      select current_setting('loadweir.club_id', true) as club, current_setting('loadweir.person_id', true) as person,
-        current_setting('loadweir.operator', true) as operator`;
-    expect(await unit.run(scope(club, person), read)).toEqual([{ club, person, operator: '' }]);
+      select current_setting('loadweir.club_id', true) as club, current_setting('loadweir.operator', true) as operator`;
+    expect(await unit.run(scope(club, person), read)).toEqual([{ club, operator: '' }]);
     expect(await unit.run(scope(club, person), async () => currentScope())).toEqual({ clubId: club, personId: person });
     expect(await prisma.client.person.count()).toBe(0);
     expect(await prisma.client.club.count()).toBe(0);
@@ -114,6 +113,17 @@ describe('run', () => {
     });
     await expect(failing).rejects.toThrow('later');
     expect(await emails()).toEqual([]);
+  });
+
+  test('of nobody yet, it joins for a person, as long as that work lasts', async () => {
+    const person = randomUUID();
+    const seen = await unit.run(scope(club), async () => [
+      currentScope().personId,
+      await unit.run(scope(club, person), async () => currentScope().personId),
+      currentScope().personId,
+      new Set([await transactionId(), await unit.run(scope(club, person), transactionId)]).size,
+    ]);
+    expect(seen).toEqual([null, person, null, 1]);
   });
 
   test('never reaches into a second club, changes its person or becomes the operator', async () => {

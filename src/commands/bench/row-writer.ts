@@ -78,8 +78,7 @@ export class RowWriter {
   async #name(): Promise<void> {
     await this.#client.query({
       name: 'name the club',
-      text: `select set_config('loadweir.club_id', $1, true), set_config('loadweir.person_id', '', true),
-        set_config('loadweir.operator', '', true)`,
+      text: `select set_config('loadweir.club_id', $1, true), set_config('loadweir.operator', '', true)`,
       values: [this.#clubId],
     });
   }

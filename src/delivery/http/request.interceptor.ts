@@ -46,12 +46,19 @@ export class RequestInterceptor implements NestInterceptor {
       refuseOtherMediaType(request, context.getHandler());
       return of(await this.work.runAsOperator(handle));
     }
-    const principal = await this.authenticate(request);
-    request.principal = principal;
-    refuseOtherMediaType(request, context.getHandler());
-    const answer = await this.work.run({ clubId: principal.clubId, personId: principal.personId }, async () => {
-      await this.requireAccess(principal, rule, request);
-      return this.once(request, reply, handle);
+    const token = bearerOf(request);
+    const clubId = token === null ? null : clubOfToken(token);
+    if (token === null || clubId === null) throw new UnauthenticatedError();
+    // Until it is known who asks, the unit of work sees one club and no person.
+    const answer = await this.work.run({ clubId, personId: null }, async () => {
+      const principal = await this.access.principal(token);
+      if (principal === null) throw new UnauthenticatedError();
+      request.principal = principal;
+      refuseOtherMediaType(request, context.getHandler());
+      return this.work.run({ clubId, personId: principal.personId }, async () => {
+        await this.requireAccess(principal, rule, request);
+        return this.once(request, reply, handle);
+      });
     });
     return of(answer);
   }
@@ -62,16 +69,6 @@ export class RequestInterceptor implements NestInterceptor {
     if (key === undefined || given === null || !sameSecret(given, key)) {
       throw new UnauthenticatedError('The operator key is needed.');
     }
-  }
-
-  /** A transaction of its own, that sees one club and no person yet. */
-  private async authenticate(request: AppRequest): Promise<Principal> {
-    const token = bearerOf(request);
-    const clubId = token === null ? null : clubOfToken(token);
-    if (token === null || clubId === null) throw new UnauthenticatedError();
-    const principal = await this.work.run({ clubId, personId: null }, () => this.access.principal(token));
-    if (principal === null) throw new UnauthenticatedError();
-    return principal;
   }
 
   private async requireAccess(principal: Principal, { action, target }: AccessRule, request: AppRequest) {
