@@ -20,6 +20,7 @@ export default {
   testTimeout: 60_000,
   // One more than two cores: files that wait for processes, heartbeats and locks leave time to the others.
   maxWorkers: 3,
+  testEnvironment: '<rootDir>/.config/jest-environment.mjs',
   testSequencer: '<rootDir>/.config/jest-long-first.mjs',
   workerIdleMemoryLimit: '1200MB',
 };
