@@ -1,4 +1,5 @@
 import type { IncomingMessage } from 'node:http';
+import type { Socket } from 'node:net';
 import helmet from '@fastify/helmet';
 import { FastifyAdapter } from '@nestjs/platform-fastify';
 import type { NestFastifyApplication } from '@nestjs/platform-fastify';
@@ -65,11 +66,20 @@ function acceptBodies(server: FastifyInstance): void {
   );
 }
 
-/** While the server closes, every answer tells its client to let go; else a kept connection would hold the close. */
+/**
+ * While the server closes, every answer tells its client to let go, and connections on which nothing was ever asked are
+ * ended (clients open some in advance); else either would hold the close.
+ */
 function closeInPeace(server: FastifyInstance): void {
+  const connections = new Set<Socket>();
   let closing = false;
+  server.server.on('connection', (socket: Socket) => {
+    connections.add(socket);
+    socket.once('close', () => connections.delete(socket));
+  });
   server.addHook('preClose', (done) => {
     closing = true;
+    for (const socket of connections) if (socket.bytesRead === 0) socket.destroy();
     done();
   });
   server.addHook('onSend', async (_request, reply) => {
