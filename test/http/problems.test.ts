@@ -1,4 +1,6 @@
+import { once } from 'node:events';
 import { request as httpRequest, Agent } from 'node:http';
+import { connect } from 'node:net';
 import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
 import pg from 'pg';
 import { startTestApp } from '../support/app.ts';
@@ -164,6 +166,11 @@ describe('the description', () => {
     expect(post.responses.default.content['application/problem+json']).toBeDefined();
     expect(body.paths['/v1/squads'].get.security).toEqual([{ bearer: [] }]);
     expect(Object.keys(body.paths as object)).toContain('/v1/athletes/{athleteId}/memberships/{membershipId}/end');
+    const paths = body.paths as Record<string, Record<string, { summary?: string }>>;
+    const silent = Object.entries(paths).flatMap(([path, operations]) =>
+      Object.entries(operations).flatMap(([method, { summary }]) => (summary ? [] : [`${method} ${path}`])),
+    );
+    expect(silent).toEqual([]);
   });
 });
 
@@ -220,5 +227,19 @@ test('closing answers what is under way and lets kept connections go', async () 
   await closed;
   agent.destroy();
   expect([answer.status, answer.headers.get('connection')]).toEqual([200, 'close']);
+  expect(Date.now() - begun).toBeLessThan(5000);
+});
+
+test('closing waits for no connection on which nothing was asked', async () => {
+  const other = await startTestApp();
+  const { hostname, port } = new URL(other.url);
+  const silent = connect(Number(port), hostname);
+  await once(silent, 'connect');
+  expect((await other.api('GET', '/health/live')).status).toBe(200);
+  const begun = Date.now();
+  const ended = once(silent, 'close');
+  silent.resume();
+  await other.close();
+  await ended;
   expect(Date.now() - begun).toBeLessThan(5000);
 });

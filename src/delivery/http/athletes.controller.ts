@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post, Query } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import {
   athleteInputSchema,
@@ -28,14 +28,15 @@ export class AthletesController {
   constructor(private readonly athletes: AthletesService) {}
 
   @Post()
+  @ApiOperation({ summary: 'Add an athlete to a squad from a day on.' })
   @Access('athletes.write', { kind: 'club' })
   @Answer(201, athleteSchema)
   async add(@Body({ schema: athleteInputSchema }) input: AthleteInput, @CurrentPrincipal() principal: Principal) {
     return this.athletes.add(principal, input);
   }
 
-  /** Athletes of one squad today, or all the person may read. */
   @Get()
+  @ApiOperation({ summary: 'Athletes of one squad today, or all the person may read.' })
   @Access('athletes.read', { kind: 'club' })
   @Answer(200, athleteListSchema)
   async list(
@@ -46,6 +47,7 @@ export class AthletesController {
   }
 
   @Get(':athleteId')
+  @ApiOperation({ summary: 'One athlete.' })
   @Access('athletes.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, athleteSchema)
   async one(@Param({ schema: athleteParamsSchema }) { athleteId }: { athleteId: string }) {
@@ -53,6 +55,7 @@ export class AthletesController {
   }
 
   @Post(':athleteId/memberships')
+  @ApiOperation({ summary: 'Put the athlete into a squad for a time; stays may not overlap.' })
   @Access('athletes.write', { kind: 'athlete', param: 'athleteId' })
   @Answer(201, membershipSchema)
   async addMembership(
@@ -64,6 +67,7 @@ export class AthletesController {
   }
 
   @Get(':athleteId/memberships')
+  @ApiOperation({ summary: 'The squads the athlete was and is in.' })
   @Access('athletes.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, membershipListSchema)
   async memberships(@Param({ schema: athleteParamsSchema }) { athleteId }: { athleteId: string }) {
@@ -71,6 +75,7 @@ export class AthletesController {
   }
 
   @Post(':athleteId/memberships/:membershipId/end')
+  @ApiOperation({ summary: 'End a stay in a squad on a day.' })
   @Access('athletes.write', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, membershipSchema)
   async endMembership(
@@ -82,6 +87,7 @@ export class AthletesController {
   }
 
   @Post(':athleteId/zone-periods')
+  @ApiOperation({ summary: 'Another time zone for a time, such as a camp.' })
   @Access('athletes.write', { kind: 'athlete', param: 'athleteId' })
   @Answer(201, zonePeriodSchema)
   async addZonePeriod(
@@ -92,6 +98,7 @@ export class AthletesController {
   }
 
   @Get(':athleteId/zone-periods')
+  @ApiOperation({ summary: 'Times the athlete spent in other zones.' })
   @Access('athletes.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, zonePeriodListSchema)
   async zonePeriods(@Param({ schema: athleteParamsSchema }) { athleteId }: { athleteId: string }) {

@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import {
   availabilityEndSchema,
@@ -21,6 +21,7 @@ export class AvailabilityController {
   constructor(private readonly availability: AvailabilityService) {}
 
   @Post()
+  @ApiOperation({ summary: 'Say that an athlete is fully, partly or not available for a time.' })
   @Access('availability.write', { kind: 'athlete', param: 'athleteId' })
   @Answer(201, availabilitySchema)
   async add(
@@ -31,8 +32,8 @@ export class AvailabilityController {
     return this.availability.add(principal, athleteId, input);
   }
 
-  /** State and until when; cause and reason as far as the one asking may know them. */
   @Get()
+  @ApiOperation({ summary: 'State and until when; cause and reason as far as the one asking may know them.' })
   @Access('availability.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, availabilityListSchema)
   async list(
@@ -43,6 +44,7 @@ export class AvailabilityController {
   }
 
   @Post(':availabilityId/end')
+  @ApiOperation({ summary: 'End an entry on a day.' })
   @Access('availability.write', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, availabilitySchema)
   async end(

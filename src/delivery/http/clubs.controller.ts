@@ -1,5 +1,5 @@
 import { Body, Controller, Post, Req, Res } from '@nestjs/common';
-import { ApiBearerAuth, ApiHeader, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiHeader, ApiOperation, ApiTags } from '@nestjs/swagger';
 import { clubInputSchema, clubMadeSchema } from '../../features/clubs/clubs.schema.ts';
 import type { ClubInput } from '../../features/clubs/clubs.schema.ts';
 import { ClubsService } from '../../features/clubs/clubs.service.ts';
@@ -14,8 +14,11 @@ import type { AppReply, AppRequest } from './request.types.ts';
 export class ClubsController {
   constructor(private readonly clubs: ClubsService) {}
 
-  /** By the operator's key. With an Idempotency-Key the same club is answered again, with 200 and without a token. */
   @Post()
+  @ApiOperation({
+    summary:
+      'By the operator’s key. With an Idempotency-Key the same club is answered again, with 200 and without a token.',
+  })
   @Access('club.create', { kind: 'operator' })
   @ApiHeader({ name: 'Idempotency-Key', required: false })
   @Answer(201, clubMadeSchema)

@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post, Query } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import {
   closingInputSchema,
   closingListSchema,
@@ -23,6 +23,7 @@ export class DaysController {
   constructor(private readonly days: DaysService) {}
 
   @Get()
+  @ApiOperation({ summary: 'Which days of a stretch are closed.' })
   @Access('days.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, closingListSchema)
   async closings(
@@ -33,14 +34,15 @@ export class DaysController {
   }
 
   @Get(':day')
+  @ApiOperation({ summary: 'What is known of each athlete on a day.' })
   @Access('days.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, squadDaySchema)
   async squadDay(@Param({ schema: squadDayParamsSchema }) { squadId, day }: { squadId: string; day: string }) {
     return this.days.squadDay(squadId, day);
   }
 
-  /** The day's log is whole, but for the athletes named: whoever else has no session rested. */
   @Post(':day/closing')
+  @ApiOperation({ summary: 'The day’s log is whole, but for the athletes named: whoever else has no session rested.' })
   @Access('days.close', { kind: 'squad', param: 'squadId' })
   @Answer(200, closingSchema)
   async close(
@@ -51,6 +53,7 @@ export class DaysController {
   }
 
   @Post(':day/reopening')
+  @ApiOperation({ summary: 'Take a closing back.' })
   @Access('days.close', { kind: 'squad', param: 'squadId' })
   @Answer(200, reopeningSchema)
   async reopen(

@@ -26,6 +26,7 @@ export function serveDocs(app: NestFastifyApplication): void {
     jsonDocumentUrl: 'docs/json',
     raw: ['json'],
     customSiteTitle: 'Loadweir',
+    customCss: '.swagger-ui .topbar { display: none }',
     swaggerOptions: { validatorUrl: null },
   });
 }

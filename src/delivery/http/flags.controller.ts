@@ -1,5 +1,5 @@
 import { Controller, Get, Param, Query } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import { CAUTIONS } from '../../features/flags/cautions.types.ts';
 import {
   athleteFlagsParamsSchema,
@@ -18,16 +18,18 @@ import { Answer } from './answer.decorator.ts';
 export class FlagsController {
   constructor(private readonly flags: FlagsService) {}
 
-  /** All flags of the athlete, newest first; open ones have no `until`. */
   @Get('athletes/:athleteId/flags')
+  @ApiOperation({ summary: 'All flags of the athlete, newest first; open ones have no until.' })
   @Access('flags.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, athleteFlagsSchema)
   async ofAthlete(@Param({ schema: athleteFlagsParamsSchema }) { athleteId }: { athleteId: string }) {
     return { cautions: CAUTIONS, items: await this.flags.ofAthlete(athleteId) };
   }
 
-  /** Flags of the squad that are open on its last closed day not after `day` (today where none is named). */
   @Get('squads/:squadId/flags')
+  @ApiOperation({
+    summary: 'Flags of the squad that are open on its last closed day not after day (today where none is named).',
+  })
   @Access('flags.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, squadFlagsSchema)
   async ofSquad(

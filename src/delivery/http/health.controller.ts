@@ -1,5 +1,5 @@
 import { Controller, Get } from '@nestjs/common';
-import { ApiTags } from '@nestjs/swagger';
+import { ApiOperation, ApiTags } from '@nestjs/swagger';
 import { z } from 'zod';
 import { UnavailableError } from '../../platform/errors.ts';
 import { Readiness } from '../../platform/readiness.ts';
@@ -11,16 +11,16 @@ import { Answer } from './answer.decorator.ts';
 export class HealthController {
   constructor(private readonly readiness: Readiness) {}
 
-  /** The process runs. */
   @Get('live')
+  @ApiOperation({ summary: 'The process runs.' })
   @Public()
   @Answer(200, z.object({ live: z.literal(true) }))
   live() {
     return { live: true };
   }
 
-  /** It can do its work: the database answers and has every table. */
   @Get('ready')
+  @ApiOperation({ summary: 'It can do its work: the database answers and has every table.' })
   @Public()
   @Answer(200, z.object({ ready: z.literal(true) }))
   async ready() {

@@ -1,5 +1,5 @@
 import { Controller, Get } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import { meSchema } from '../../features/people/people.schema.ts';
 import { PeopleService } from '../../features/people/people.service.ts';
@@ -13,6 +13,7 @@ export class MeController {
   constructor(private readonly people: PeopleService) {}
 
   @Get()
+  @ApiOperation({ summary: 'Who is asking, with which roles.' })
   @Access('self.read', { kind: 'self' })
   @Answer(200, meSchema)
   async me(@CurrentPrincipal() principal: Principal) {

@@ -1,5 +1,5 @@
 import { Body, Controller, Delete, Get, Param, Post } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import {
   assignedRoleSchema,
   personInputSchema,
@@ -21,6 +21,7 @@ export class PeopleController {
   constructor(private readonly people: PeopleService) {}
 
   @Post()
+  @ApiOperation({ summary: 'Add a person, with roles if wanted.' })
   @Access('people.write', { kind: 'club' })
   @Answer(201, personSchema)
   async add(@Body({ schema: personInputSchema }) input: PersonInput) {
@@ -28,6 +29,7 @@ export class PeopleController {
   }
 
   @Get()
+  @ApiOperation({ summary: 'All people of the club.' })
   @Access('people.read', { kind: 'club' })
   @Answer(200, personListSchema)
   async list() {
@@ -35,6 +37,7 @@ export class PeopleController {
   }
 
   @Get(':personId')
+  @ApiOperation({ summary: 'One person with their roles.' })
   @Access('people.read', { kind: 'person', param: 'personId' })
   @Answer(200, personSchema)
   async one(@Param({ schema: personParamsSchema }) { personId }: { personId: string }) {
@@ -42,6 +45,7 @@ export class PeopleController {
   }
 
   @Post(':personId/roles')
+  @ApiOperation({ summary: 'Give a role in the club or one squad.' })
   @Access('roles.write', { kind: 'person', param: 'personId' })
   @Answer(201, assignedRoleSchema)
   async addRole(
@@ -52,6 +56,7 @@ export class PeopleController {
   }
 
   @Delete(':personId/roles/:roleId')
+  @ApiOperation({ summary: 'Take a role away.' })
   @Access('roles.write', { kind: 'person', param: 'personId' })
   @Answer(204)
   async removeRole(

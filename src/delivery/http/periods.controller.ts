@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import {
   periodInputSchema,
@@ -19,6 +19,7 @@ export class PeriodsController {
   constructor(private readonly periods: PeriodsService) {}
 
   @Post()
+  @ApiOperation({ summary: 'Plan an overload (at most 21 days), an unload or a taper, for the squad or one athlete.' })
   @Access('periods.write', { kind: 'squad', param: 'squadId' })
   @Answer(201, periodSchema)
   async add(
@@ -30,6 +31,7 @@ export class PeriodsController {
   }
 
   @Get()
+  @ApiOperation({ summary: 'Planned overloads, unloads and tapers.' })
   @Access('periods.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, periodListSchema)
   async list(@Param({ schema: periodParamsSchema }) { squadId }: { squadId: string }) {

@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import { PolicyChangeListener } from '../../features/policies/policy-change.ts';
 import {
   policyAddedSchema,
@@ -21,8 +21,10 @@ export class PoliciesController {
     private readonly listener: PolicyChangeListener,
   ) {}
 
-  /** Settings that are not named stay as they were. Other weights or another bound weigh later sessions anew. */
   @Post()
+  @ApiOperation({
+    summary: 'Settings that are not named stay as they were. Other weights or another bound weigh later sessions anew.',
+  })
   @Access('policies.write', { kind: 'squad', param: 'squadId' })
   @Answer(201, policyAddedSchema)
   async add(
@@ -35,6 +37,7 @@ export class PoliciesController {
   }
 
   @Get()
+  @ApiOperation({ summary: 'How the squad’s load is weighed and judged, newest first.' })
   @Access('policies.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, policyListSchema)
   async list(@Param({ schema: policyParamsSchema }) { squadId }: { squadId: string }) {

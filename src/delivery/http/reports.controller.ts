@@ -1,5 +1,5 @@
 import { Body, Controller, Get, HttpStatus, Param, Post, Res, StreamableFile } from '@nestjs/common';
-import { ApiBearerAuth, ApiProduces, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiProduces, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import { ReportDeliveriesService } from '../../features/reports/report-deliveries.service.ts';
 import {
@@ -29,8 +29,10 @@ export class ReportsController {
     private readonly deliveries: ReportDeliveriesService,
   ) {}
 
-  /** Makes the report of a week; 200 with the newest version where it says the same already. Mails nothing. */
   @Post('squads/:squadId/reports')
+  @ApiOperation({
+    summary: 'Makes the report of a week; 200 with the newest version where it says the same already. Mails nothing.',
+  })
   @Access('reports.write', { kind: 'squad', param: 'squadId' })
   @Answer(201, reportMetaSchema)
   async make(
@@ -45,6 +47,7 @@ export class ReportsController {
   }
 
   @Get('squads/:squadId/reports')
+  @ApiOperation({ summary: 'Reports of the squad, newest first.' })
   @Access('reports.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, reportListSchema)
   async list(@Param({ schema: squadReportsParamsSchema }) { squadId }: { squadId: string }) {
@@ -52,8 +55,8 @@ export class ReportsController {
     return { items: reports.map(withFiles) };
   }
 
-  /** The record with everything it says, figures unrounded. */
   @Get('reports/:reportId')
+  @ApiOperation({ summary: 'The record with everything it says, figures unrounded.' })
   @Access('reports.read', { kind: 'report', param: 'reportId' })
   @Answer(200, reportSchema)
   async report(@Param({ schema: reportParamsSchema }) { reportId }: { reportId: string }) {
@@ -62,6 +65,7 @@ export class ReportsController {
   }
 
   @Get('reports/:reportId/workbook')
+  @ApiOperation({ summary: 'The workbook of a report (.xlsx).' })
   @Access('reports.read', { kind: 'report', param: 'reportId' })
   @ApiProduces(XLSX)
   @Answer(200)
@@ -75,6 +79,7 @@ export class ReportsController {
   }
 
   @Get('reports/:reportId/deliveries')
+  @ApiOperation({ summary: 'To whom a report was mailed, and what became of it.' })
   @Access('reports.read', { kind: 'report', param: 'reportId' })
   @Answer(200, deliveryListSchema)
   async delivered(@Param({ schema: reportParamsSchema }) { reportId }: { reportId: string }) {

@@ -1,5 +1,5 @@
 import { Controller, Get, Param } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import { ReweighService } from '../../features/sessions/reweigh.service.ts';
 import { reweighingParamsSchema, reweighingSchema } from '../../features/sessions/sessions.schema.ts';
 import { Access } from './access.decorator.ts';
@@ -11,8 +11,8 @@ import { Answer } from './answer.decorator.ts';
 export class ReweighingsController {
   constructor(private readonly reweigh: ReweighService) {}
 
-  /** How far a re-weighing has come, and which sessions weigh differently so far. */
   @Get(':taskId')
+  @ApiOperation({ summary: 'How far a re-weighing has come, and which sessions weigh differently so far.' })
   @Access('thresholds.read', { kind: 'reweighing', param: 'taskId' })
   @Answer(200, reweighingSchema)
   async one(@Param({ schema: reweighingParamsSchema }) { taskId }: { taskId: string }) {

@@ -1,5 +1,5 @@
 import { Controller, Get, Param, Query } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import {
   overviewParamsSchema,
   overviewQuerySchema,
@@ -19,8 +19,11 @@ import { Answer } from './answer.decorator.ts';
 export class SeriesController {
   constructor(private readonly series: SeriesService) {}
 
-  /** Days up to the squad's last closed one; the last item is the morning after it. Without `from` the last 56 days. */
   @Get('athletes/:athleteId/series')
+  @ApiOperation({
+    summary:
+      'Days up to the squad’s last closed one; the last item is the morning after it. Without from the last 56 days.',
+  })
   @Access('series.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, seriesSchema)
   async ofAthlete(
@@ -30,8 +33,8 @@ export class SeriesController {
     return this.series.excerpt(athleteId, query);
   }
 
-  /** The squad on its last closed day not after `day` (today where none is named). */
   @Get('squads/:squadId/overview')
+  @ApiOperation({ summary: 'The squad on its last closed day not after day (today where none is named).' })
   @Access('series.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, overviewSchema)
   async overview(

@@ -1,5 +1,5 @@
 import { Body, Controller, Param, Post, Query, Res } from '@nestjs/common';
-import { ApiBearerAuth, ApiBody, ApiConsumes, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiBody, ApiConsumes, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import { SessionImportService } from '../../features/sessions/session-import.service.ts';
 import {
@@ -18,8 +18,11 @@ import type { AppReply } from './request.types.ts';
 export class SessionImportsController {
   constructor(private readonly imports: SessionImportService) {}
 
-  /** A sheet of sessions, one a row: every row, or none and everything that is wrong. A dry run only looks (200). */
   @Post()
+  @ApiOperation({
+    summary:
+      'A sheet of sessions, one a row: every row, or none and everything that is wrong. A dry run only looks (200).',
+  })
   @Access('sessions.import', { kind: 'squad', param: 'squadId' })
   @ApiConsumes('text/csv')
   @ApiBody({ schema: { type: 'string' } })

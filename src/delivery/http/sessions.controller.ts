@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post, Put, Query, Req, Res } from '@nestjs/common';
-import { ApiBearerAuth, ApiHeader, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiHeader, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import { SessionReadingService } from '../../features/sessions/session-reading.service.ts';
 import {
@@ -39,6 +39,7 @@ export class SessionsController {
   ) {}
 
   @Post('athletes/:athleteId/sessions')
+  @ApiOperation({ summary: 'Log a session of one athlete.' })
   @Access('sessions.write', { kind: 'athlete', param: 'athleteId' })
   @Answer(201, sessionSchema)
   async log(
@@ -50,8 +51,8 @@ export class SessionsController {
     return tagged(reply, await this.sessions.log(principal, athleteId, input));
   }
 
-  /** One session given to many athletes, each with own rating: all or none. */
   @Post('squads/:squadId/sessions')
+  @ApiOperation({ summary: 'One session given to many athletes, each with own rating: all or none.' })
   @Access('sessions.write', { kind: 'squad', param: 'squadId' })
   @Answer(201, groupAnswerSchema)
   async logForGroup(
@@ -62,8 +63,8 @@ export class SessionsController {
     return this.sessions.logForGroup(principal, squadId, input);
   }
 
-  /** Sessions that were not withdrawn, newest start first. */
   @Get('athletes/:athleteId/sessions')
+  @ApiOperation({ summary: 'Sessions that were not withdrawn, newest start first.' })
   @Access('sessions.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, sessionPageSchema)
   async page(
@@ -74,6 +75,7 @@ export class SessionsController {
   }
 
   @Get('sessions/:sessionId')
+  @ApiOperation({ summary: 'One session with its weight; the ETag is its version.' })
   @Access('sessions.read', { kind: 'session', param: 'sessionId' })
   @Answer(200, sessionSchema)
   async one(
@@ -84,14 +86,15 @@ export class SessionsController {
   }
 
   @Get('sessions/:sessionId/history')
+  @ApiOperation({ summary: 'Every version of a session, who changed it and why.' })
   @Access('sessions.read', { kind: 'session', param: 'sessionId' })
   @Answer(200, sessionHistorySchema)
   async history(@Param({ schema: sessionParamsSchema }) { sessionId }: { sessionId: string }) {
     return this.reading.history(sessionId);
   }
 
-  /** Replaces what was entered; what is left out is taken out. */
   @Put('sessions/:sessionId')
+  @ApiOperation({ summary: 'Replaces what was entered; what is left out is taken out.' })
   @Access('sessions.write', { kind: 'session', param: 'sessionId' })
   @ApiHeader({ name: 'If-Match', required: true, description: 'ETag of the version the change is based on' })
   @Answer(200, sessionSchema)
@@ -106,6 +109,7 @@ export class SessionsController {
   }
 
   @Post('sessions/:sessionId/withdrawal')
+  @ApiOperation({ summary: 'Take a session out of the log, with the reason; needs If-Match.' })
   @Access('sessions.write', { kind: 'session', param: 'sessionId' })
   @ApiHeader({ name: 'If-Match', required: true, description: 'ETag of the version the withdrawal is based on' })
   @Answer(200, sessionSchema)

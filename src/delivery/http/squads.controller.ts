@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import {
   squadInputSchema,
@@ -18,16 +18,16 @@ import { Answer } from './answer.decorator.ts';
 export class SquadsController {
   constructor(private readonly squads: SquadsService) {}
 
-  /** The squad's first policy is made with it, with the defaults, from 2000-01-01 on. */
   @Post()
+  @ApiOperation({ summary: 'The squad’s first policy is made with it, with the defaults, from 2000-01-01 on.' })
   @Access('squads.write', { kind: 'club' })
   @Answer(201, squadSchema)
   async add(@Body({ schema: squadInputSchema }) input: SquadInput) {
     return this.squads.add(input);
   }
 
-  /** The squads the person may read. */
   @Get()
+  @ApiOperation({ summary: 'The squads the person may read.' })
   @Access('squads.read', { kind: 'club' })
   @Answer(200, squadListSchema)
   async list(@CurrentPrincipal() principal: Principal) {
@@ -35,6 +35,7 @@ export class SquadsController {
   }
 
   @Get(':squadId')
+  @ApiOperation({ summary: 'One squad.' })
   @Access('squads.read', { kind: 'squad', param: 'squadId' })
   @Answer(200, squadSchema)
   async one(@Param({ schema: squadParamsSchema }) { squadId }: { squadId: string }) {

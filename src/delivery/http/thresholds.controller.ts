@@ -1,5 +1,5 @@
 import { Body, Controller, Get, Param, Post, Query } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import { ThresholdEntryService } from '../../features/thresholds/threshold-entry.service.ts';
 import {
@@ -35,8 +35,10 @@ export class ThresholdsController {
     private readonly entry: ThresholdEntryService,
   ) {}
 
-  /** Many values, all or none. Sessions they touch are weighed again; more than 500 of them by a task. */
   @Post()
+  @ApiOperation({
+    summary: 'Many values, all or none. Sessions they touch are weighed again; more than 500 of them by a task.',
+  })
   @Access('thresholds.enter', { kind: 'athlete', param: 'athleteId' })
   @Answer(201, thresholdsAnswerSchema)
   async enter(
@@ -47,8 +49,8 @@ export class ThresholdsController {
     return this.entry.enter(principal, athleteId, input);
   }
 
-  /** The history, corrected and withdrawn values included. */
   @Get()
+  @ApiOperation({ summary: 'The history, corrected and withdrawn values included.' })
   @Access('thresholds.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, thresholdListSchema)
   async history(
@@ -60,6 +62,7 @@ export class ThresholdsController {
   }
 
   @Get('in-force')
+  @ApiOperation({ summary: 'The values in force on a day for a modality and setting.' })
   @Access('thresholds.read', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, inForceSchema)
   async inForce(
@@ -71,6 +74,7 @@ export class ThresholdsController {
   }
 
   @Post(':valueId/correction')
+  @ApiOperation({ summary: 'Correct a value, with the reason; the old one stays in the history.' })
   @Access('thresholds.enter', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, thresholdCorrectionAnswerSchema)
   async correct(
@@ -82,6 +86,7 @@ export class ThresholdsController {
   }
 
   @Post(':valueId/withdrawal')
+  @ApiOperation({ summary: 'Withdraw a value, with the reason; its days fall back to the value before.' })
   @Access('thresholds.enter', { kind: 'athlete', param: 'athleteId' })
   @Answer(200, thresholdWithdrawalAnswerSchema)
   async withdraw(

@@ -1,5 +1,5 @@
 import { Body, Controller, Delete, Get, Param, Post } from '@nestjs/common';
-import { ApiBearerAuth, ApiTags } from '@nestjs/swagger';
+import { ApiBearerAuth, ApiOperation, ApiTags } from '@nestjs/swagger';
 import type { Principal } from '../../features/access/access.types.ts';
 import {
   issuedTokenSchema,
@@ -19,8 +19,8 @@ import { Answer } from './answer.decorator.ts';
 export class TokensController {
   constructor(private readonly tokens: TokensService) {}
 
-  /** The secret is shown in this answer only. */
   @Post()
+  @ApiOperation({ summary: 'The secret is shown in this answer only.' })
   @Access('tokens.write', { kind: 'person', param: 'personId' })
   @Answer(201, issuedTokenSchema)
   async issue(
@@ -32,6 +32,7 @@ export class TokensController {
   }
 
   @Get()
+  @ApiOperation({ summary: 'Tokens of a person, without their secrets.' })
   @Access('tokens.read', { kind: 'person', param: 'personId' })
   @Answer(200, tokenListSchema)
   async list(@Param({ schema: personParamsSchema }) { personId }: { personId: string }) {
@@ -39,6 +40,7 @@ export class TokensController {
   }
 
   @Delete(':tokenId')
+  @ApiOperation({ summary: 'Make a token useless from now on.' })
   @Access('tokens.write', { kind: 'person', param: 'personId' })
   @Answer(204)
   async revoke(
