@@ -1,3 +1,4 @@
+import { chartMethods } from './catalogue/chart-methods.ts';
 import { closedFormMethods } from './catalogue/closed-form-methods.ts';
 import { domainMethods } from './catalogue/domain-methods.ts';
 import { flagMethods } from './catalogue/flag-methods.ts';
@@ -5,6 +6,7 @@ import { heartRateMethods } from './catalogue/heart-rate-methods.ts';
 import { loadMethods } from './catalogue/load-methods.ts';
 import { measureMethods } from './catalogue/measure-methods.ts';
 import type { Method } from './catalogue/method.ts';
+import { monitoringMethods } from './catalogue/monitoring-methods.ts';
 import { ratioMethods } from './catalogue/ratio-methods.ts';
 import { responseMethods } from './catalogue/response-methods.ts';
 import { seriesMethods } from './catalogue/series-methods.ts';
@@ -22,6 +24,8 @@ export const catalogue: readonly Method[] = [
   ...ratioMethods,
   ...responseMethods,
   ...closedFormMethods,
+  ...monitoringMethods,
+  ...chartMethods,
   ...flagMethods,
   ...measureMethods,
 ];

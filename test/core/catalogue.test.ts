@@ -91,6 +91,27 @@ const inputs: Readonly<Record<string, [object, unknown]>> = {
     { days: [], options: { minKnown: 1 } },
     { measure: 'rating-load', reason: 'domain load is known on 0 of 0 days' },
   ],
+  'coefficient-of-variation': [{ values: [1, 1] }, 0],
+  rmssd: [{ intervalsMs: [800, 810, 800, null] }, 10],
+  'ln-rmssd': [{ rmssdMs: 1 }, 0],
+  'clean-rr-intervals': [{ intervalsMs: [800, 1600, 800] }, [800, NaN, 800]],
+  'hooper-sum': [{ sleep: 1, fatigue: 2, stress: 3, soreness: 4 }, 10],
+  'total-mood-disturbance': [
+    { scores: { tension: 1, depression: 1, anger: 1, fatigue: 1, confusion: 1, vigour: 6 }, offset: 100 },
+    99,
+  ],
+  'typical-error': [{ first: [1, 2], second: [2, 3] }, 0],
+  'typical-error-percent': [{ first: [1, 2], second: [2, 4] }, 0],
+  'limits-of-agreement': [{ typicalErrorOfOne: 0 }, 0],
+  'smallest-worthwhile-change': [{ results: [10, 10] }, 0],
+  'tabular-cusum': [
+    { values: [1, 9], target: 0, slack: 1, limit: 4 },
+    { high: [0, 8], low: [0, 0], signals: [1] },
+  ],
+  'ewma-chart': [{ values: [2, null], target: 0, weight: 0.5 }, [1, 1]],
+  'ewma-limit': [{ sd: 2, weight: 1, width: 3, count: 1 }, 6],
+  'average-run-length-cusum': [{ slack: 0.5, limit: 4, shift: 1 }, expect.closeTo(8.38, 2)],
+  'average-run-length-ewma': [{ weight: 0.2, width: 2.962, shift: 1 }, expect.closeTo(10.54, 2)],
   'basis-mix-shift': [{ acute: { power: 5 }, chronic: { power: 5, speed: 5 } }, 50],
 };
 

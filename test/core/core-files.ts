@@ -43,6 +43,9 @@ export const HELPERS: Readonly<Record<string, string>> = {
   'flags/types.ts': 'types',
   'flags/constituent.ts': 'the fold the measures share',
   'flags/load-concern-settings.ts': 'checks of settings',
+  'numeric/gauss-legendre.ts': 'points of integration',
+  'numeric/normal.ts': 'the normal distribution',
+  'numeric/solve-linear.ts': 'linear algebra',
 };
 
 /** Functions that are part of another method and stand in no table. */

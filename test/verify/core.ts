@@ -8,6 +8,18 @@ import {
   heartRateLoadEdwards,
 } from '../../src/core/load/heart-rate-load-edwards.ts';
 import { heartRateLoadThreePhase, phaseShares } from '../../src/core/load/heart-rate-load-three-phase.ts';
+import { ewmaChart, ewmaLimit } from '../../src/core/monitoring/ewma-chart.ts';
+import { hooperSum } from '../../src/core/monitoring/hooper-sum.ts';
+import { lnRmssd, rmssd } from '../../src/core/monitoring/rmssd.ts';
+import { averageRunLengthCusum, averageRunLengthEwma } from '../../src/core/monitoring/run-length.ts';
+import { tabularCusum } from '../../src/core/monitoring/tabular-cusum.ts';
+import { totalMoodDisturbance } from '../../src/core/monitoring/total-mood-disturbance.ts';
+import {
+  limitsOfAgreement,
+  smallestWorthwhileChange,
+  typicalError,
+  typicalErrorPercent,
+} from '../../src/core/monitoring/typical-error.ts';
 import { monotonyPopulation, monotonySample, strain } from '../../src/core/load/monotony.ts';
 import { sessionRatingLoad } from '../../src/core/load/session-rating-load.ts';
 import { volumeLoad } from '../../src/core/load/volume-load.ts';
@@ -25,7 +37,10 @@ import {
   steadyStateSumInclusive,
 } from '../../src/core/response/steady-state-sum.ts';
 import { gainRatioFromRecovery, timeToPeak, timeToRecover } from '../../src/core/response/time-to-recover.ts';
+import { coefficientOfVariation } from '../../src/core/series/coefficient-of-variation.ts';
 import { smoothingFactor } from '../../src/core/series/exponential-mean.ts';
+import { mean } from '../../src/core/series/mean.ts';
+import { rollingMean } from '../../src/core/series/rolling-mean.ts';
 import { standardDeviationSample } from '../../src/core/series/standard-deviation.ts';
 
 /** The functions under check by home and name. Rows call them only through this table, so that a test can put wrong ones in. */
@@ -39,6 +54,13 @@ const homes = {
   'load/monotony.ts': { monotonyPopulation, monotonySample, strain },
   'load/session-rating-load.ts': { sessionRatingLoad },
   'load/volume-load.ts': { volumeLoad },
+  'monitoring/ewma-chart.ts': { ewmaChart, ewmaLimit },
+  'monitoring/hooper-sum.ts': { hooperSum },
+  'monitoring/rmssd.ts': { lnRmssd, rmssd },
+  'monitoring/run-length.ts': { averageRunLengthCusum, averageRunLengthEwma },
+  'monitoring/tabular-cusum.ts': { tabularCusum },
+  'monitoring/total-mood-disturbance.ts': { totalMoodDisturbance },
+  'monitoring/typical-error.ts': { limitsOfAgreement, smallestWorthwhileChange, typicalError, typicalErrorPercent },
   'ratio/acute-chronic-coupled.ts': { acuteChronicCoupled },
   'ratio/acute-chronic-exponential.ts': { acuteChronicExponential },
   'ratio/acute-chronic-uncoupled.ts': { acuteChronicUncoupled },
@@ -49,7 +71,10 @@ const homes = {
   'response/impulse-response.ts': { impulseResponse, impulseResponseInclusive },
   'response/steady-state-sum.ts': { partialSumInclusive, steadyStateSumExclusive, steadyStateSumInclusive },
   'response/time-to-recover.ts': { gainRatioFromRecovery, timeToPeak, timeToRecover },
+  'series/coefficient-of-variation.ts': { coefficientOfVariation },
   'series/exponential-mean.ts': { smoothingFactor },
+  'series/mean.ts': { mean },
+  'series/rolling-mean.ts': { rollingMean },
   'series/standard-deviation.ts': { standardDeviationSample },
 };
 

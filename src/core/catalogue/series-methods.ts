@@ -20,7 +20,7 @@ export const seriesMethods: readonly Method[] = [
     unit: 'load units a day',
     source: 'own convention',
     provenance: PROVENANCE.own,
-    checkedAgainst: [],
+    checkedAgainst: ['HRV-03'],
   }),
   define({
     file: 'series/known-days.ts',

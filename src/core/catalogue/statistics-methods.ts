@@ -1,3 +1,4 @@
+import { coefficientOfVariation } from '../series/coefficient-of-variation.ts';
 import { mean } from '../series/mean.ts';
 import { median } from '../series/median.ts';
 import { quantile, quantileSorted } from '../series/quantile.ts';
@@ -13,7 +14,7 @@ const windowDays = input('windowDays', 'days');
 const q = input('q', 'fraction, 0 to 1');
 
 const moments: readonly Method[] = [
-  { fn: mean, file: 'series/mean.ts', name: 'Mean', checkedAgainst: [] },
+  { fn: mean, file: 'series/mean.ts', name: 'Mean', checkedAgainst: ['HRV-02'] },
   {
     fn: standardDeviationPopulation,
     file: 'series/standard-deviation.ts',
@@ -24,7 +25,7 @@ const moments: readonly Method[] = [
     fn: standardDeviationSample,
     file: 'series/standard-deviation.ts',
     name: 'Sample standard deviation',
-    checkedAgainst: ['SR-07'],
+    checkedAgainst: ['SR-07', 'HRV-02'],
   },
 ].map((one) =>
   define({
@@ -38,6 +39,16 @@ const moments: readonly Method[] = [
 
 export const statisticsMethods: readonly Method[] = [
   ...moments,
+  define({
+    file: 'series/coefficient-of-variation.ts',
+    fn: coefficientOfVariation,
+    name: 'Coefficient of variation',
+    inputs: [values],
+    unit: '%',
+    source: 'textbook definition',
+    provenance: PROVENANCE.textbook,
+    checkedAgainst: ['HRV-02'],
+  }),
   define({
     file: 'series/quantile.ts',
     fn: quantile,
