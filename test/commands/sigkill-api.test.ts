@@ -61,7 +61,7 @@ it('keeps every session it said yes to, once, and no other, through twenty kills
   const send = async (): Promise<void> => {
     while (begun < SESSIONS) {
       if (begun >= released) {
-        await pause(2);
+        await pause(10);
         continue;
       }
       const number = (begun += 1);
