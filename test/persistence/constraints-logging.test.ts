@@ -1,11 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
-import pg from 'pg';
-import { translateDatabaseError } from '../../src/persistence/constraint-errors.ts';
-import { constraintMessages } from '../../src/persistence/constraint-messages.ts';
-import { AppError } from '../../src/platform/errors.ts';
-import { createTestDatabase } from '../support/database.ts';
-import type { TestDatabase } from '../support/database.ts';
+import { expectRefused, openAsOwner } from './support/constraints.ts';
+import type { OwnersDatabase } from './support/constraints.ts';
 
 // Every constraint of what is logged is broken once, past the schemas of the edge, and says what is allowed.
 const tables = [
@@ -23,12 +19,10 @@ const tables = [
 const [club, squad, athlete, session] = [randomUUID(), randomUUID(), randomUUID(), randomUUID()];
 const now = '2026-03-02T12:00:00Z';
 
-let db: TestDatabase;
-let owner: pg.Client;
+let db: OwnersDatabase;
 beforeAll(async () => {
-  db = await createTestDatabase();
-  owner = new pg.Client({ connectionString: db.ownerUrl });
-  await owner.connect();
+  db = await openAsOwner();
+  const { insert } = db;
   await insert('club', { id: club, name: 'Club', created_at: now });
   await insert('squad', { club_id: club, id: squad, name: 'Squad', zone: 'UTC', created_at: now });
   await insert('athlete', { club_id: club, id: athlete, name: 'Alex', created_at: now });
@@ -38,16 +32,7 @@ beforeAll(async () => {
   await insert('availability', { ...newAvailability(), valid_from: '2026-01-01', valid_to: null });
   await insert('load_period', { ...newPeriod(), valid_from: '2026-01-01', valid_to: '2026-01-10' });
 });
-afterAll(async () => {
-  await owner.end();
-  await db.drop();
-});
-
-async function insert(table: string, row: object): Promise<void> {
-  const names = Object.keys(row);
-  const places = names.map((_, i) => `$${i + 1}`);
-  await owner.query(`insert into ${table} (${names.join(', ')}) values (${places.join(', ')})`, Object.values(row));
-}
+afterAll(() => db.close());
 
 const own = () => ({ club_id: club, id: randomUUID() });
 const newValue = () => ({
@@ -166,26 +151,10 @@ const broken: Case[] = [
 describe('constraints of what is logged', () => {
   test.each(broken)('%s', async (constraint, row, status) => {
     const table = tables.find((name) => constraint.startsWith(`${name}_`))!;
-    const given = Object.fromEntries(Object.entries(row).filter(([, value]) => value !== undefined));
-    const error: unknown = await insert(table, given).then(
-      () => undefined,
-      (refusal: unknown) => refusal,
-    );
-    expect(error).toMatchObject({ constraint });
-    const told = translateDatabaseError(error);
-    expect(told).toBeInstanceOf(AppError);
-    const { field, allowed } = constraintMessages[constraint]!;
-    expect(told).toMatchObject({ status, fields: [{ field, allowed }] });
+    await expectRefused(db.insert(table, row), constraint, status);
   });
 
   test('none is left out', async () => {
-    const { rows } = await owner.query<{ conname: string }>(
-      `select conname from pg_constraint
-       where conrelid = any($1::regclass[]) and contype in ('c', 'f', 'u', 'x') order by conname`,
-      [tables],
-    );
-    expect([...new Set(broken.map(([constraint]) => constraint))].toSorted()).toEqual(
-      rows.map(({ conname }) => conname),
-    );
+    expect([...new Set(broken.map(([constraint]) => constraint))].toSorted()).toEqual(await db.constraintsOf(tables));
   });
 });

@@ -1,23 +1,20 @@
 import { randomBytes, randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
-import pg from 'pg';
-import { translateDatabaseError } from '../../src/persistence/constraint-errors.ts';
-import { constraintMessages } from '../../src/persistence/constraint-messages.ts';
-import { AppError } from '../../src/platform/errors.ts';
-import { createTestDatabase } from '../support/database.ts';
-import type { TestDatabase } from '../support/database.ts';
+import { expectRefused, openAsOwner } from './support/constraints.ts';
+import type { OwnersDatabase } from './support/constraints.ts';
 
 // Every constraint of these tables is broken once, past the schemas of the edge, and says what is allowed.
-const tables = ['club', 'person', 'role_assignment', 'access_token', 'squad', 'load_policy', 'athlete', 'membership'];
+const tables = [
+  ...['club', 'person', 'role_assignment', 'access_token', 'squad', 'load_policy'],
+  ...['athlete', 'membership', 'zone_period'],
+];
 const [club, person, squad, athlete] = [randomUUID(), randomUUID(), randomUUID(), randomUUID()];
 const now = '2026-03-02T12:00:00Z';
 
-let db: TestDatabase;
-let owner: pg.Client;
+let db: OwnersDatabase;
 beforeAll(async () => {
-  db = await createTestDatabase();
-  owner = new pg.Client({ connectionString: db.ownerUrl });
-  await owner.connect();
+  db = await openAsOwner();
+  const { insert } = db;
   await insert('club', { id: club, name: 'Club', external_key: 'key', created_at: now });
   await insert('person', { club_id: club, id: person, name: 'Pat', email: 'pat@example.org', created_at: now });
   await insert('squad', { club_id: club, id: squad, name: 'Squad', zone: 'UTC', created_at: now });
@@ -27,16 +24,7 @@ beforeAll(async () => {
   await insert('zone_period', { ...newZone(), valid_from: '2026-01-01', valid_to: '2026-01-10' });
   await insert('load_policy', { ...newPolicy(), valid_from: '2026-01-01' });
 });
-afterAll(async () => {
-  await owner.end();
-  await db.drop();
-});
-
-async function insert(table: string, row: object): Promise<void> {
-  const names = Object.keys(row);
-  const places = names.map((_, i) => `$${i + 1}`);
-  await owner.query(`insert into ${table} (${names.join(', ')}) values (${places.join(', ')})`, Object.values(row));
-}
+afterAll(() => db.close());
 
 const newClub = () => ({ id: randomUUID(), name: 'Other', created_at: now });
 const newPerson = () => ({ club_id: club, id: randomUUID(), name: 'Kim', email: 'kim@example.org', created_at: now });
@@ -107,25 +95,11 @@ const longAgo = { valid_from: '2019-01-01', valid_to: '2019-01-02' };
 
 describe('a broken constraint', () => {
   test.each(broken)('%s', async (constraint, table, row, status) => {
-    const error: unknown = await insert(table, row()).catch((reason: unknown) => reason);
-    expect((error as pg.DatabaseError).constraint).toBe(constraint);
-    const told = translateDatabaseError(error);
-    expect(told).toBeInstanceOf(AppError);
-    const { status: answered, fields } = told as AppError;
-    expect(answered).toBe(status);
-    const { field, allowed } = constraintMessages[constraint]!;
-    expect(fields).toEqual([expect.objectContaining({ field, allowed })]);
+    await expectRefused(db.insert(table, row()), constraint, status);
   });
 
   test('none of these tables is forgotten', async () => {
-    const { rows } = await owner.query<{ name: string }>(
-      `select conname as name from pg_constraint
-       where conrelid = any($1::regclass[]) and contype <> 'p' and contype <> 'n' and conname not like '%_club_fk'
-       union select indexrelid::regclass::text from pg_index
-       where indrelid = any($1::regclass[]) and indisunique and not indisprimary`,
-      [[...tables, 'zone_period']],
-    );
-    const named = rows.map(({ name }) => name).filter((name) => name !== 'access_token_token_hash_key');
-    expect(broken.map(([constraint]) => constraint).toSorted()).toEqual(named.toSorted());
+    const named = (await db.constraintsOf(tables)).filter((name) => name !== 'access_token_token_hash_key');
+    expect(broken.map(([constraint]) => constraint).toSorted()).toEqual(named);
   });
 });
