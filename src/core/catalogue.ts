@@ -9,6 +9,7 @@ import type { Method } from './catalogue/method.ts';
 import { monitoringMethods } from './catalogue/monitoring-methods.ts';
 import { ratioMethods } from './catalogue/ratio-methods.ts';
 import { responseMethods } from './catalogue/response-methods.ts';
+import { resultMethods } from './catalogue/result-methods.ts';
 import { seriesMethods } from './catalogue/series-methods.ts';
 import { statisticsMethods } from './catalogue/statistics-methods.ts';
 
@@ -25,6 +26,7 @@ export const catalogue: readonly Method[] = [
   ...responseMethods,
   ...closedFormMethods,
   ...monitoringMethods,
+  ...resultMethods,
   ...chartMethods,
   ...flagMethods,
   ...measureMethods,

@@ -104,6 +104,8 @@ const inputs: Readonly<Record<string, [object, unknown]>> = {
   'typical-error-percent': [{ first: [1, 2], second: [2, 4] }, 0],
   'limits-of-agreement': [{ typicalErrorOfOne: 0 }, 0],
   'smallest-worthwhile-change': [{ results: [10, 10] }, 0],
+  'expected-result': [{ results: [1, 2, 3].map((day) => ({ day, value: 10 * day })), day: 18 }, 20],
+  'deviation-in-typical-errors': [{ value: 294, expected: 302, typicalErrorOfOne: 4, higherIsBetter: 1 }, -2],
   'tabular-cusum': [
     { values: [1, 9], target: 0, slack: 1, limit: 4 },
     { high: [0, 8], low: [0, 0], signals: [1] },

@@ -2,6 +2,7 @@ import { describe, expect, test } from '@jest/globals';
 import fc from 'fast-check';
 import { cleanRrIntervals } from '../../src/core/monitoring/clean-rr-intervals.ts';
 import { ewmaChart, ewmaLimit } from '../../src/core/monitoring/ewma-chart.ts';
+import { deviationInTypicalErrors, expectedResult } from '../../src/core/monitoring/expected-result.ts';
 import { hooperSum } from '../../src/core/monitoring/hooper-sum.ts';
 import { lnRmssd, rmssd } from '../../src/core/monitoring/rmssd.ts';
 import { averageRunLengthCusum, averageRunLengthEwma } from '../../src/core/monitoring/run-length.ts';
@@ -80,6 +81,28 @@ test('the typical error does not see a change that all share; in percent it does
   expect(() => typicalError([1, 2], [1])).toThrow(/second/);
   expect(() => typicalErrorPercent([1, 0], [1, 1])).toThrow(/first\[1\]/);
   expect(typicalError([1], [2])).toBeNaN();
+});
+
+describe('the expected result', () => {
+  const fortnightly = [1, 15, 29, 43, 57, 71, 85].map((day, index) => ({ day, value: 300 + index }));
+
+  test('is the mean of the last three to six that are 15 days older, and before the first sign', () => {
+    expect(expectedResult(fortnightly, 44)).toBe(301);
+    expect(expectedResult(fortnightly, 43)).toBeNaN();
+    expect(expectedResult(fortnightly, 200)).toBe((301 + 302 + 303 + 304 + 305 + 306) / 6);
+    expect(expectedResult(fortnightly, 200, 57)).toBe((300 + 301 + 302 + 303) / 4);
+    expect(expectedResult(fortnightly, 200, 29)).toBeNaN();
+    expect(expectedResult([...fortnightly, { day: 90, value: NaN }].toReversed(), 200)).toBe(303.5);
+    expect(() => expectedResult(fortnightly, 44.5)).toThrow(/day = 44.5/);
+  });
+
+  test('is missed in typical errors, negative where the result is worse', () => {
+    expect(deviationInTypicalErrors(406, 400, 2, -1)).toBe(-3);
+    expect(deviationInTypicalErrors(406, 400, 2, 1)).toBe(3);
+    expect(deviationInTypicalErrors(406, NaN, 2, 1)).toBeNaN();
+    expect(() => deviationInTypicalErrors(1, 1, 0, 1)).toThrow(/typicalErrorOfOne/);
+    expect(() => deviationInTypicalErrors(1, 1, 1, 0)).toThrow(/higherIsBetter/);
+  });
 });
 
 describe('control charts', () => {
