@@ -35,7 +35,7 @@ type PathItem = OpenAPIObject['paths'][string];
 
 /** What the way in and the way out do for every route: keys, the bearer's token, problem documents. */
 function sayWhatAllShare(path: string, item: PathItem): void {
-  for (const method of ['get', 'post', 'put', 'delete'] as const) {
+  for (const method of ['get', 'post', 'put', 'patch', 'delete'] as const) {
     const operation = item[method];
     if (operation === undefined) continue;
     operation.responses.default = { description: 'A problem', content: { 'application/problem+json': problem } };

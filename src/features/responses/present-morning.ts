@@ -1,0 +1,24 @@
+import { hooperSum } from '../../core/monitoring/hooper-sum.ts';
+import type { MorningReceipt, MorningView } from './mornings.schema.ts';
+import type { Morning } from './mornings.types.ts';
+
+/** The sum of the four ratings; NaN where one is missing. */
+export function sumOf({ sleep, fatigue, stress, soreness }: Morning): number {
+  return hooperSum(sleep ?? NaN, fatigue ?? NaN, stress ?? NaN, soreness ?? NaN);
+}
+
+export function presentMorning({ rrIntervalsMs, enteredAt, updatedAt, withdrawnAt, ...morning }: Morning): MorningView {
+  const sum = sumOf({ rrIntervalsMs, enteredAt, updatedAt, withdrawnAt, ...morning });
+  return {
+    ...morning,
+    sum: Number.isNaN(sum) ? null : sum,
+    rrIntervals: rrIntervalsMs.length,
+    enteredAt: enteredAt.toISOString(),
+    updatedAt: updatedAt.toISOString(),
+    withdrawnAt: withdrawnAt?.toISOString() ?? null,
+  };
+}
+
+export function receiptOf({ id, athleteId, day, version }: Morning): MorningReceipt {
+  return { id, athleteId, day, version };
+}
