@@ -11,10 +11,12 @@ import { PeopleModule } from './features/people/people.module.ts';
 import { PeriodsModule } from './features/periods/periods.module.ts';
 import { PoliciesModule } from './features/policies/policies.module.ts';
 import { ReportsModule } from './features/reports/reports.module.ts';
+import { ResponsesModule } from './features/responses/responses.module.ts';
 import { SeriesModule } from './features/series/series.module.ts';
 import { ReweighModule } from './features/sessions/reweigh.module.ts';
 import { SessionsModule } from './features/sessions/sessions.module.ts';
 import { SquadsModule } from './features/squads/squads.module.ts';
+import { TestsModule } from './features/tests/tests.module.ts';
 import { ThresholdsModule } from './features/thresholds/thresholds.module.ts';
 import { PersistenceModule } from './persistence/persistence.module.ts';
 import { Clock } from './platform/clock.ts';
@@ -35,10 +37,12 @@ const features = [
   PeriodsModule,
   PoliciesModule,
   ReportsModule,
+  ResponsesModule,
   ReweighModule,
   SeriesModule,
   SessionsModule,
   SquadsModule,
+  TestsModule,
   ThresholdsModule,
 ];
 

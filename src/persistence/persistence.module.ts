@@ -6,6 +6,8 @@ import { IdempotencyRepository } from '../features/access/idempotency.repository
 import { TokensRepository } from '../features/access/tokens.repository.ts';
 import { AthletesRepository } from '../features/athletes/athletes.repository.ts';
 import { AvailabilityRepository } from '../features/availability/availability.repository.ts';
+import { CircumstancesRepository } from '../features/responses/circumstances.repository.ts';
+import { MorningsRepository } from '../features/responses/mornings.repository.ts';
 import { ClubsRepository } from '../features/clubs/clubs.repository.ts';
 import { DaysRepository } from '../features/days/days.repository.ts';
 import { JobRecordRepository } from '../features/jobs/job-record.repository.ts';
@@ -17,6 +19,7 @@ import { ReportRepository } from '../features/reports/reports.repository.ts';
 import { ReweighRepository } from '../features/sessions/reweigh.repository.ts';
 import { SessionsRepository } from '../features/sessions/sessions.repository.ts';
 import { SquadsRepository } from '../features/squads/squads.repository.ts';
+import { TestsRepository } from '../features/tests/tests.repository.ts';
 import { ThresholdsRepository } from '../features/thresholds/thresholds.repository.ts';
 import { databaseAppUrl } from '../platform/database-url.ts';
 import type { Env } from '../platform/env.ts';
@@ -28,6 +31,8 @@ import { PrismaAccessRepository } from './prisma-access.repository.ts';
 import { PrismaAthletesRepository } from './prisma-athletes.repository.ts';
 import { PrismaAuditRepository } from './prisma-audit.repository.ts';
 import { PrismaAvailabilityRepository } from './prisma-availability.repository.ts';
+import { PrismaCircumstancesRepository } from './prisma-circumstances.repository.ts';
+import { PrismaMorningsRepository } from './prisma-mornings.repository.ts';
 import { PrismaClubsRepository } from './prisma-clubs.repository.ts';
 import { PrismaDayRepository } from './prisma-day.repository.ts';
 import { PrismaFlagRepository } from './prisma-flag.repository.ts';
@@ -41,6 +46,7 @@ import { PrismaReportRepository } from './prisma-report.repository.ts';
 import { PrismaReweighRepository } from './prisma-reweigh.repository.ts';
 import { PrismaSessionRepository } from './prisma-session.repository.ts';
 import { PrismaSquadsRepository } from './prisma-squads.repository.ts';
+import { PrismaTestsRepository } from './prisma-tests.repository.ts';
 import { PrismaThresholdRepository } from './prisma-threshold.repository.ts';
 import { PrismaTokensRepository } from './prisma-tokens.repository.ts';
 import { PrismaUnitOfWork } from './prisma-unit-of-work.ts';
@@ -54,6 +60,8 @@ const ports: Provider[] = [
   { provide: AthletesRepository, useClass: PrismaAthletesRepository },
   { provide: AuditRepository, useClass: PrismaAuditRepository },
   { provide: AvailabilityRepository, useClass: PrismaAvailabilityRepository },
+  { provide: CircumstancesRepository, useClass: PrismaCircumstancesRepository },
+  { provide: MorningsRepository, useClass: PrismaMorningsRepository },
   { provide: ClubsRepository, useClass: PrismaClubsRepository },
   { provide: DaysRepository, useClass: PrismaDayRepository },
   { provide: FlagRepository, useClass: PrismaFlagRepository },
@@ -66,6 +74,7 @@ const ports: Provider[] = [
   { provide: ReweighRepository, useClass: PrismaReweighRepository },
   { provide: SessionsRepository, useClass: PrismaSessionRepository },
   { provide: SquadsRepository, useClass: PrismaSquadsRepository },
+  { provide: TestsRepository, useClass: PrismaTestsRepository },
   { provide: ThresholdsRepository, useClass: PrismaThresholdRepository },
   { provide: TokensRepository, useClass: PrismaTokensRepository },
 ];

@@ -3,12 +3,14 @@ import { APP_FILTER, APP_INTERCEPTOR, APP_PIPE, DiscoveryModule } from '@nestjs/
 import { AccessRules } from './access-rules.ts';
 import { AthletesController } from './athletes.controller.ts';
 import { AvailabilityController } from './availability.controller.ts';
+import { CircumstancesController } from './circumstances.controller.ts';
 import { ClubsController } from './clubs.controller.ts';
 import { DaysController } from './days.controller.ts';
 import { FlagsController } from './flags.controller.ts';
 import { HealthController } from './health.controller.ts';
 import { JobRunsController } from './job-runs.controller.ts';
 import { MeController } from './me.controller.ts';
+import { MorningsController } from './mornings.controller.ts';
 import { PeopleController } from './people.controller.ts';
 import { PeriodsController } from './periods.controller.ts';
 import { PoliciesController } from './policies.controller.ts';
@@ -21,6 +23,7 @@ import { SeriesController } from './series.controller.ts';
 import { SessionImportsController } from './session-imports.controller.ts';
 import { SessionsController } from './sessions.controller.ts';
 import { SquadsController } from './squads.controller.ts';
+import { TestsController } from './tests.controller.ts';
 import { ThresholdsController } from './thresholds.controller.ts';
 import { TokensController } from './tokens.controller.ts';
 import { ZodPipe } from './zod.pipe.ts';
@@ -30,12 +33,14 @@ import { ZodPipe } from './zod.pipe.ts';
   controllers: [
     AthletesController,
     AvailabilityController,
+    CircumstancesController,
     ClubsController,
     DaysController,
     FlagsController,
     HealthController,
     JobRunsController,
     MeController,
+    MorningsController,
     PeopleController,
     PeriodsController,
     PoliciesController,
@@ -45,6 +50,7 @@ import { ZodPipe } from './zod.pipe.ts';
     SessionImportsController,
     SessionsController,
     SquadsController,
+    TestsController,
     ThresholdsController,
     TokensController,
   ],
