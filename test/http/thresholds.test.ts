@@ -185,4 +185,24 @@ describe('thresholds', () => {
     if (now.size === 2) expect(now.get('lt1-power')).toBeLessThan(Number(now.get('critical-power')));
     expect(answers.some(({ status }) => status === 201)).toBe(true);
   });
+
+  it('a body mass far from the one before has to be confirmed', async () => {
+    const { athleteId, token } = await newAthlete();
+    const mass = (amount: number, validFrom: string, more: object = {}) =>
+      enter(athleteId, [value('body-mass', amount, validFrom, { modality: undefined, ...more })], token);
+    expect((await mass(68, '2026-01-10')).status).toBe(201);
+    const jump = await mass(83, '2026-02-01');
+    expect([jump.status, jump.body.errors]).toEqual([
+      422,
+      [
+        {
+          ...{ field: 'values[0].value', value: 83, allowed: '61.2 to 74.8 kg, within 10 % of 68 kg of 2026-01-10' },
+          hint: 'If it is right, send it with confirmed: true.',
+        },
+      ],
+    ]);
+    expect((await mass(74, '2026-02-01')).status).toBe(201);
+    expect((await mass(90, '2026-02-10', { confirmed: true })).status).toBe(201);
+    expect((await mass(60, '2026-02-12', { confirmed: false })).status).toBe(400);
+  });
 });

@@ -11,7 +11,7 @@ import { changedDays, dateValues } from './date-values.ts';
 import { presentThreshold } from './present-threshold.ts';
 import { ThresholdChangeListener } from './threshold-change.types.ts';
 import type { Reweighed } from './threshold-change.types.ts';
-import { refuseDisorder, refuseFutureDays, refuseMisfit, refuseSameDay } from './threshold-rules.ts';
+import { refuseDisorder, refuseFutureDays, refuseMassJump, refuseMisfit, refuseSameDay } from './threshold-rules.ts';
 import { ThresholdsRepository } from './thresholds.repository.ts';
 import type { ThresholdCorrection, ThresholdEntry, ThresholdsInput } from './thresholds.schema.ts';
 import type { ThresholdValue } from './thresholds.types.ts';
@@ -35,6 +35,7 @@ export class ThresholdEntryService {
     refuseFutureDays(values, localDay(now, await this.athletes.zoneOn(athleteId, now)));
     await this.thresholds.lockForChange(athleteId);
     const before = await this.thresholds.list([athleteId]);
+    refuseMassJump(values, before);
     const added = values.map((entry) => newValue(entry, { athleteId, enteredBy: principal.personId, enteredAt: now }));
     const { after, reweighed } = await this.change(athleteId, before, [...before, ...added]);
     await this.note('enter', athleteId, added);

@@ -1,8 +1,10 @@
+import { dayNumber } from '../../core/series/day.ts';
 import { ConflictError, RuleError, ValidationError } from '../../platform/errors.ts';
 import type { FieldError } from '../../platform/errors.ts';
 import { orderConflict } from './check-order.ts';
 import { sameDayPair } from './date-values.ts';
 import { errorAllowed, isInRange, rangeOf } from './thresholds.schema.ts';
+import type { ThresholdEntry } from './thresholds.schema.ts';
 import { quantityRanges } from './thresholds.types.ts';
 import type { Quantity, ThresholdValue } from './thresholds.types.ts';
 
@@ -14,6 +16,32 @@ export function refuseFutureDays(values: readonly { validFrom: string }[], today
       : [],
   );
   if (fields.length > 0) throw new RuleError('A value cannot be valid from a day in the future.', fields);
+}
+
+/** A body mass this far from the nearest earlier one, not older than that, is asked about first: own convention. */
+const LARGEST_MASS_STEP = 0.1;
+const MASS_LOOK_BACK_DAYS = 60;
+
+/** A body mass far from the one before is more often another athlete's, or pounds: it has to be confirmed. */
+export function refuseMassJump(
+  values: readonly Pick<ThresholdEntry, 'quantity' | 'value' | 'validFrom' | 'confirmed'>[],
+  before: readonly ThresholdValue[],
+): void {
+  const masses = before.filter(({ quantity, withdrawnAt }) => quantity === 'body-mass' && withdrawnAt === null);
+  const fields = values.flatMap(({ quantity, value, validFrom, confirmed }, index): FieldError[] => {
+    if (quantity !== 'body-mass' || confirmed === true) return [];
+    const last = masses
+      .filter((mass) => {
+        const age = dayNumber(validFrom) - dayNumber(mass.validFrom);
+        return age > 0 && age <= MASS_LOOK_BACK_DAYS;
+      })
+      .reduce<ThresholdValue | null>((a, b) => (a === null || b.validFrom > a.validFrom ? b : a), null);
+    if (last === null || Math.abs(value - last.value) <= LARGEST_MASS_STEP * last.value) return [];
+    const [low, high] = [1 - LARGEST_MASS_STEP, 1 + LARGEST_MASS_STEP].map((part) => (part * last.value).toFixed(1));
+    const allowed = `${low} to ${high} kg, within 10 % of ${last.value} kg of ${last.validFrom}`;
+    return [{ field: `values[${index}].value`, value, allowed, hint: 'If it is right, send it with confirmed: true.' }];
+  });
+  if (fields.length > 0) throw new RuleError('This body mass is far from the one before.', fields);
 }
 
 /** A correction meets the range of its value's quantity. */

@@ -34,6 +34,8 @@ const entrySchema = z
     ...measured,
     method: lineSchema(80),
     validFrom: daySchema,
+    /** Said of a value that is right although it is far from the one before. */
+    confirmed: z.literal(true, { error: 'true, or left out' }).optional(),
   })
   .superRefine((entry, context) => {
     const wrong = (field: string, input: unknown, message: string) =>
