@@ -82,7 +82,7 @@ test('low chronic load: clears on the third day at or above the limit ÷ 0.95', 
   expect(spans(after(40, 52, 52, 52))).toEqual([[100, null]]);
 });
 
-test.each(['unload', 'taper', 'unavailable', 'return', 'planned-overload'] as const)(
+test.each(['unload', 'taper', 'return', 'planned-overload'] as const)(
   'low chronic load says nothing in %s, and closes on its first day',
   (muted) => {
     const days = quietDays(110, (index) => (index >= 100 ? { chronic: 30 } : {}));
@@ -92,7 +92,21 @@ test.each(['unload', 'taper', 'unavailable', 'return', 'planned-overload'] as co
   },
 );
 
-test.each(['planned-overload', 'return', 'unavailable'] as const)('the ratio says nothing in %s', (muted) => {
+test('without training because unavailable nothing is raised; what is open ends on the third day of it', () => {
+  const ratios = ratioDays(...repeat(12, 1.8));
+  expect(spans(mute(ratios, 0, 11, 'unavailable'))).toEqual([]);
+  expect(spans(mute(ratios, 4, 5, 'unavailable'))).toEqual([[0, null]]);
+  expect(spans(mute(ratios, 4, 6, 'unavailable'))).toEqual([
+    [0, 6],
+    [7, null],
+  ]);
+  expect(spans(mute(mute(ratios, 3, 4, 'unavailable'), 6, 7, 'unavailable'))).toEqual([[0, null]]);
+  const low = quietDays(110, (index) => (index >= 100 ? { chronic: 30 } : {}));
+  expect(spans(mute(low, 104, 105, 'unavailable'))).toEqual([[100, null]]);
+  expect(spans(mute(low, 104, 109, 'unavailable'))).toEqual([[100, 106]]);
+});
+
+test.each(['planned-overload', 'return'] as const)('the ratio says nothing in %s', (muted) => {
   const days = ratioDays(...repeat(10, 1.8));
   expect(spans(mute(days, 0, 9, muted))).toEqual([]);
   expect(spans(mute(days, 4, 6, muted))).toEqual([

@@ -35,6 +35,7 @@ export function chronicLowConcern(
     days,
     (index) => {
       const { day, chronic, muted } = days[index]!;
+      if (muted === 'unavailable') return { kind: 'absent' };
       if (muted !== null) return { kind: 'muted' };
       if (Number.isNaN(chronic) || day - firstDay + 1 < historyMinDays) return { kind: 'silent' };
       const limit = chronicLowShare * usual[index]!;

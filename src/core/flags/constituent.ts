@@ -8,10 +8,14 @@ export interface Constituent {
   readonly evidence: Omit<LoadEvidence, 'since' | 'until'>;
 }
 
-/** What one day says to a measure. 'silent': no value, so it neither raises, clears nor resets. */
+/**
+ * What one day says to a measure. 'silent': no value, so it neither raises, clears nor resets. 'absent': no training
+ * because unavailable; it ends an open stretch only when it lasts.
+ */
 export type Verdict =
   | { readonly kind: 'muted' }
   | { readonly kind: 'silent' }
+  | { readonly kind: 'absent' }
   | {
       readonly kind: 'judged';
       readonly raised: boolean;
@@ -20,8 +24,11 @@ export type Verdict =
       readonly evidence: Omit<LoadEvidence, 'since' | 'until'>;
     };
 
+/** So many unavailable days in a row end a concern: own convention, the days it takes to clear. */
+const ABSENT_DAYS = 3;
+
 /**
- * Folds the days' verdicts into stretches: open when raised, closed after enough judged days inside in a row, or at once when muted.
+ * Folds the days' verdicts into stretches: open when raised, closed after enough judged days inside in a row, at once when muted, or on the third absent day in a row.
  * Each day sees only itself and the state before it.
  */
 export function stretches(
@@ -32,10 +39,12 @@ export function stretches(
   const done: Constituent[] = [];
   let open: Constituent | null = null;
   let inside = 0;
+  let absent = 0;
   days.forEach(({ day }, index) => {
     const today = verdict(index);
-    if (today.kind === 'silent') return;
-    if (today.kind === 'muted') {
+    absent = today.kind === 'absent' ? absent + 1 : 0;
+    if (today.kind === 'silent' || (today.kind === 'absent' && absent < ABSENT_DAYS)) return;
+    if (today.kind === 'muted' || today.kind === 'absent') {
       if (open !== null) done.push({ ...open, until: day });
       open = null;
       return;

@@ -6,7 +6,7 @@ import type { LoadConcernSettings } from './load-concern-settings.ts';
 
 const SUNDAY = 7;
 const BLOCKS = 6;
-const MUTED_BY: readonly (Muting | null)[] = ['planned-overload', 'unavailable', 'return'];
+const MUTED_BY: readonly (Muting | null)[] = ['planned-overload', 'return'];
 
 /**
  * Stretches in which weeks were even and strained the athlete more than any of the six weeks before.
@@ -36,6 +36,7 @@ export function monotonyStrainConcern(days: readonly LoadConcernDay[], settings:
     days,
     (index) => {
       const { monotony, strain, muted, day } = days[index]!;
+      if (muted === 'unavailable') return { kind: 'absent' };
       if (MUTED_BY.includes(muted)) return { kind: 'muted' };
       const earlier = before[index]!;
       const judged = weekday(day) === SUNDAY && !Number.isNaN(monotony) && !Number.isNaN(strain);

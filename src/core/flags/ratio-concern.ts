@@ -6,7 +6,7 @@ import type { LoadConcernSettings } from './load-concern-settings.ts';
 
 const ACUTE_DAYS = 7;
 const OWN_UPPER_END = 0.95;
-const MUTED_BY: readonly (Muting | null)[] = ['planned-overload', 'unavailable', 'return'];
+const MUTED_BY: readonly (Muting | null)[] = ['planned-overload', 'return'];
 
 /**
  * Stretches in which the acute:chronic ratio stood above the general limit and the athlete's own upper end.
@@ -38,6 +38,7 @@ export function ratioConcern(
     days,
     (index) => {
       const { day, ratio, muted } = days[index]!;
+      if (muted === 'unavailable') return { kind: 'absent' };
       if (MUTED_BY.includes(muted)) return { kind: 'muted' };
       if (Number.isNaN(ratio)) return { kind: 'silent' };
       const own = index >= ACUTE_DAYS && day - firstDay + 1 >= historyMinDays ? upperEnd[index - ACUTE_DAYS]! : NaN;
