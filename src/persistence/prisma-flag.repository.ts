@@ -116,9 +116,13 @@ export class PrismaFlagRepository extends FlagRepository {
        order by s.athlete_id, s.training_day, s.modality`;
   }
 
-  async periods(squadId: string): Promise<PlannedPeriod[]> {
-    const rows = await currentTransaction().loadPeriod.findMany({ where: { squadId }, orderBy: { validFrom: 'asc' } });
+  async periods(squadIds: readonly string[]): Promise<PlannedPeriod[]> {
+    const rows = await currentTransaction().loadPeriod.findMany({
+      where: { squadId: { in: [...squadIds] } },
+      orderBy: { validFrom: 'asc' },
+    });
     return rows.map((row) => ({
+      squadId: row.squadId,
       athleteId: row.athleteId,
       purpose: z.enum(['overload', 'unload', 'taper']).parse(row.purpose),
       from: dayOf(row.validFrom),

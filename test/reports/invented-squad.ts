@@ -82,7 +82,7 @@ export function inventedView(
   });
   const periods: PlannedPeriod[] = logs
     .filter(({ story }) => story === 'overload')
-    .map(({ athleteId }) => ({ athleteId, purpose: 'overload', from: '2026-11-19', to: '2026-12-02' }));
+    .map(({ athleteId }) => ({ squadId: 's', athleteId, purpose: 'overload', from: '2026-11-19', to: '2026-12-02' }));
   const week: SquadWeek = {
     isoWeek: '2026-W48',
     from: MONDAY,

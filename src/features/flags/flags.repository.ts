@@ -8,5 +8,5 @@ export abstract class FlagRepository {
   abstract write(flags: readonly AthleteFlag[], asOf: string): Promise<number>;
   abstract runs(athleteIds: readonly string[], until: string): Promise<RunEvidence[]>;
   abstract thresholdUse(athleteIds: readonly string[], until: string): Promise<ThresholdUse[]>;
-  abstract periods(squadId: string): Promise<PlannedPeriod[]>;
+  abstract periods(squadIds: readonly string[]): Promise<PlannedPeriod[]>;
 }

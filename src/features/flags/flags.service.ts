@@ -5,6 +5,7 @@ import { SquadsService } from '../squads/squads.service.ts';
 import type { AthleteLog } from '../series/series.service.ts';
 import { evaluateFlags } from './evaluate-flags.ts';
 import { FlagRepository } from './flags.repository.ts';
+import { periodsOf } from './periods-of.ts';
 import type { AthleteFlag, FlagSettings, StoredFlag, ThresholdUse } from './flags.types.ts';
 import { flagWords, NO_LONGER_SUPPORTED } from './sentences.ts';
 
@@ -52,7 +53,7 @@ export class FlagsService {
   ): Promise<AthleteFlag[]> {
     const ids = [...logs.keys()];
     const [periods, runs, uses] = [
-      await this.repository.periods(squadId),
+      await this.repository.periods(squadsOf(logs)),
       await this.repository.runs(ids, until),
       await this.repository.thresholdUse(ids, until),
     ];
@@ -61,7 +62,7 @@ export class FlagsService {
         records,
         series,
         settings,
-        periods: periods.filter((period) => period.athleteId === null || period.athleteId === athleteId),
+        periods: periodsOf(athleteId, records, periods),
         runs: runs.filter((run) => run.athleteId === athleteId),
         thresholdUse: uses.filter((use) => use.athleteId === athleteId),
       }).map((episode) => ({ athleteId, squadId, ...episode, ...flagWords(episode) })),
@@ -120,4 +121,10 @@ export class FlagsService {
       }));
     return this.repository.write([...flags, ...takenBack], asOf);
   }
+}
+
+/** Every squad the athletes were in. */
+function squadsOf(logs: ReadonlyMap<string, AthleteLog>): string[] {
+  const all = [...logs.values()].flatMap(({ records }) => records.flatMap((record) => record.squadId ?? []));
+  return [...new Set(all)];
 }

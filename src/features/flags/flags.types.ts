@@ -105,6 +105,7 @@ export interface ThresholdUse {
 }
 
 export interface PlannedPeriod {
+  squadId: string;
   /** Null: the whole squad. */
   athleteId: string | null;
   purpose: 'overload' | 'unload' | 'taper';

@@ -2,7 +2,14 @@ import { dayNumber } from '../../core/series/day.ts';
 import type { FlagEpisode, FlagEvidence, FlagWords, LoadPart } from './flags.types.ts';
 
 /** Said of an open or past flag that a correction of the log has taken the ground from. */
-export const NO_LONGER_SUPPORTED = 'Taken back: after a correction the log no longer shows it.';
+export const NO_LONGER_SUPPORTED =
+  'Taken back: after a correction, or by the policy or measure in force now, the log no longer shows it.';
+
+/** What the week is compared with, by the form of the ratio. */
+const BASES: Readonly<Record<string, string>> = {
+  'rolling-uncoupled': 'the three weeks before it',
+  exponential: 'the slower mean of the last weeks',
+};
 
 const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'];
 
@@ -86,7 +93,7 @@ function byMeasure(part: LoadPart, form: string, ratioLimit: number): Omit<FlagW
           : part.limit > ratioLimit
             ? `the own upper end of ${limit}`
             : `${limit} and above the own upper end`;
-      const base = form === 'rolling-uncoupled' ? 'the three weeks before it' : 'the last four weeks';
+      const base = BASES[form] ?? 'the last four weeks';
       return {
         claim: `This week's daily load is ${times2(part.value)} times that of ${base}, above ${above}`,
         ask: 'ask whether the jump was meant and how the sessions feel',
@@ -96,14 +103,14 @@ function byMeasure(part: LoadPart, form: string, ratioLimit: number): Omit<FlagW
     case 'chronic-low': {
       const usual = part.usual ?? NaN;
       return {
-        claim: `Four-week load has dropped to ${percentOf(part.value, usual)} % of the own half-year usual and no easy block is planned`,
+        claim: `Four-week load has dropped to ${percentOf(part.value, usual)} % of the own usual and no easy block is planned`,
         ask: 'ask what gets in the way of training',
         clears: `Clears when it is back at ${percentOf(part.limit / 0.95, usual)} % of the own usual on three days in a row.`,
       };
     }
     case 'monotony-strain':
       return {
-        claim: `A heavy week of much the same every day (monotony ${times1(part.value)}), with more strain than any of the six weeks before`,
+        claim: `A heavy week of much the same every day (monotony ${times1(part.value)}), with more strain than any of the six known weeks before`,
         ask: 'ask which day could be made really easy',
         clears: 'Judged again on Sunday.',
       };

@@ -58,7 +58,7 @@ describe('load concern', () => {
   });
 
   test('within a planned overload the load is silent; the phase is told, and recovering after it', () => {
-    const periods = [{ athleteId: null, purpose: 'overload' as const, from: iso(60), to: iso(66) }];
+    const periods = [{ squadId: 's', athleteId: null, purpose: 'overload' as const, from: iso(60), to: iso(66) }];
     const found = flags(log(70, jump(60)), { periods });
     const until = (kind: FlagKind) => of(kind, found).map(({ since, until: end }) => [since, end]);
     expect(until('planned-overload')).toEqual([[iso(60), iso(66)]]);

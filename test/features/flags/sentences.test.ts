@@ -56,7 +56,7 @@ describe('sentences', () => {
       "This week's daily load is 1.72 times that of the last four weeks, above the own upper end of 1.55",
     );
     expect(claim(all[1]!)).toContain('above the general limit of 1.50 (short history)');
-    expect(claim(all[2]!)).toContain('dropped to 42 % of the own half-year usual');
+    expect(claim(all[2]!)).toContain('dropped to 42 % of the own usual');
     expect(claim(all[4]!)).toBe('A run 28 % longer than the longest of the 30 days before it');
     expect(claim(all[5]!)).toBe('Day 5 of return, load at 46 % of before');
     expect(claim(all[8]!)).toContain('Within planned overload, day 5 of 14');
