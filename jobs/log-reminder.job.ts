@@ -6,6 +6,7 @@ import { PeopleService } from '../src/features/people/people.service.ts';
 import { SquadsService } from '../src/features/squads/squads.service.ts';
 import { Clock } from '../src/platform/clock.ts';
 import type { Env } from '../src/platform/env.ts';
+import { eachDespiteFailures } from '../src/platform/mail/each-despite-failures.ts';
 import { MailTransport } from '../src/platform/mail/mail-transport.ts';
 import { ENV } from '../src/platform/tokens.ts';
 import { localDateTime, localDay } from '../src/platform/zoned-time.ts';
@@ -15,6 +16,8 @@ import type { JobHandler, JobRun } from './runner/job-handler.ts';
 
 interface Reminder extends OpenDays {
   zone: string;
+  /** Of the week: the reminder is dated its evening, at every attempt. */
+  lastDay: string;
   recipients: { personId: string; name: string; email: string }[];
 }
 
@@ -36,7 +39,7 @@ export class LogReminderJob implements JobHandler {
     const reminder = await run.step(() => this.reminder(run));
     if (reminder.days.length === 0) return 'Every day is closed: nobody was reminded.';
     const refused: string[] = [];
-    for (const { personId, email } of reminder.recipients) {
+    await eachDespiteFailures(reminder.recipients, async ({ personId, email }) => {
       await run.stepOnce(`mail ${personId}`, async () => {
         const { accepted } = await this.mail.send({
           messageId: this.messageId(run, personId),
@@ -44,11 +47,11 @@ export class LogReminderJob implements JobHandler {
           to: [email],
           ...logReminderMail(reminder),
           attachments: [],
-          date: localDateTime(reminder.today, '18:00', reminder.zone),
+          date: localDateTime(reminder.lastDay, '18:00', reminder.zone),
         });
         if (!accepted) refused.push(personId);
       });
-    }
+    });
     const refusals = refused.length === 0 ? '' : `, ${refused.length} refused by the mail server`;
     return `${reminder.days.length} open, ${reminder.recipients.length} reminded${refusals}.`;
   }
@@ -63,18 +66,20 @@ export class LogReminderJob implements JobHandler {
     ];
   }
 
-  /** Days up to today that are open, and the staff of the squad. */
+  /** Days up to today on which somebody was in the squad and that are open, and the staff of the squad. */
   private async reminder({ squadId, period }: JobKey): Promise<Reminder> {
     const { name, zone } = await this.squads.squad(squadId);
     const { from, to } = periodDays('iso-week', period)!;
     const today = localDay(this.clock.now(), zone);
     const closed = new Set((await this.days.closings(squadId, from, to)).map(({ day }) => day));
-    const days = daysOf(from, to).filter((day) => day <= today && !closed.has(day));
+    const stays = await this.squads.members(squadId, from, to);
+    const peopled = (day: string) => stays.some((stay) => stay.from <= day && (stay.to === null || day <= stay.to));
+    const days = daysOf(from, to).filter((day) => day <= today && !closed.has(day) && peopled(day));
     const people = await this.people.list();
     const recipients = people
       .filter(({ roles }) => roles.some((one) => one.role === 'staff' && (one.squadId ?? squadId) === squadId))
       .map(({ id, name: person, email }) => ({ personId: id, name: person, email }));
-    return { squad: name, isoWeek: period, days, today, zone, recipients };
+    return { squad: name, isoWeek: period, days, today, zone, lastDay: to, recipients };
   }
 
   private messageId({ squadId, period }: JobKey, personId: string): string {

@@ -2,6 +2,7 @@ import { Inject, Injectable } from '@nestjs/common';
 import { Clock } from '../../platform/clock.ts';
 import type { Env } from '../../platform/env.ts';
 import { NotFoundError } from '../../platform/errors.ts';
+import { eachDespiteFailures } from '../../platform/mail/each-despite-failures.ts';
 import { MailTransport } from '../../platform/mail/mail-transport.ts';
 import { ENV } from '../../platform/tokens.ts';
 import { SquadsService } from '../squads/squads.service.ts';
@@ -78,10 +79,11 @@ export class ReportDeliveriesService {
   /**
    * Prepares and sends, each in a unit of work that `inUnit` opens: `(work) => unitOfWork.run(scope, work)`, or the step
    * of a job. Safe to call again after any crash.
+   * @throws {UnavailableError} after all were tried, if the mail server would not take some of them now
    */
   async deliver(reportId: string, inUnit: <T>(work: () => Promise<T>) => Promise<T>): Promise<DeliveryCounts> {
     const waiting = await inUnit(() => this.prepare(reportId));
-    for (const personId of waiting) await inUnit(() => this.send(reportId, personId));
+    await eachDespiteFailures(waiting, (personId) => inUnit(() => this.send(reportId, personId)));
     const rows = await inUnit(() => this.reports.deliveries(reportId));
     const count = (state: string): number => rows.filter((row) => row.state === state).length;
     return { waiting: count('waiting'), sent: count('sent'), failed: count('failed') };

@@ -11,6 +11,8 @@ interface SmtpAnswer {
 
 interface SmtpFailure extends Error {
   code?: string;
+  /** The command the server answered. */
+  command?: string;
   responseCode?: number;
   response?: string;
 }
@@ -27,7 +29,7 @@ export class SmtpTransport extends MailTransport {
   }
 
   /**
-   * Refused for good (5xx) is a receipt that says so. Everything else is thrown and may be tried again, except code
+   * A recipient or message refused for good (5xx) is a receipt that says so. Everything else is thrown and may be tried again, except code
    * `mail-outcome-unknown`: the connection was lost after the mail had gone out and before the server's word on it.
    */
   async send(mail: OutgoingMail): Promise<MailReceipt> {
@@ -41,8 +43,9 @@ export class SmtpTransport extends MailTransport {
       const note = refused === 0 ? '' : ` (refused for ${refused} of ${mail.to.length} recipients)`;
       return { accepted: true, detail: `${sent.response}${note}` };
     } catch (error) {
-      const { code, responseCode = 0, response } = error as SmtpFailure;
-      const aboutTheMail = code === 'EENVELOPE' || code === 'EMESSAGE';
+      const { code, command, responseCode = 0, response } = error as SmtpFailure;
+      // What is answered to MAIL FROM (sign in first, not this sender) is put right at the server or in the settings.
+      const aboutTheMail = (code === 'EENVELOPE' && command !== 'MAIL FROM') || code === 'EMESSAGE';
       if (aboutTheMail && responseCode >= 500) return { accepted: false, detail: response ?? String(responseCode) };
       throw new UnavailableError('The mail server did not take the mail.', {
         code: progress.goneOut && responseCode === 0 ? 'mail-outcome-unknown' : 'mail-not-sent',

@@ -104,6 +104,13 @@ test.each([
   expect(receipt.detail).toMatch(/^55[04] No such user/);
 });
 
+test('a sender the server will not have is no word on the mail: it can be tried again', async () => {
+  const refuse = { onMailFrom: (_a, _s, done) => done(refusal(530, 'Authentication required')) } as SMTPServerOptions;
+  const { port } = await mailServer(refuse);
+  const sending = new SmtpTransport(`smtp://127.0.0.1:${port}`).send(testMail());
+  await expect(sending).rejects.toMatchObject({ name: 'UnavailableError', code: 'mail-not-sent' });
+});
+
 test('one recipient of two refused: the mail went out, and the receipt says so', async () => {
   const { port, deliveries } = await mailServer({
     onRcptTo: ({ address }, _session, done) => done(address.startsWith('gone') ? refusal(550, 'No such user') : null),
