@@ -39,7 +39,7 @@ export class TickService {
     return this.unitOfWork.runAsOperator(async () => {
       const squads = await this.records.squadsOfAllClubs();
       const candidates = due(schedule, [], squads, now);
-      return due(schedule, await this.records.claimed(candidates), squads, now);
+      return due(schedule, await this.records.claimed(candidates, now), squads, now);
     });
   }
 }

@@ -10,7 +10,7 @@ import { currentScope, currentTransaction } from './prisma-unit-of-work.ts';
 export const QUEUE_SCHEMA = 'pgboss';
 
 /**
- * Seventeen attempts with growing pauses, about five hours: a mail server that is down in the morning is waited for.
+ * Seventeen attempts with growing pauses, almost four hours: a mail server that is down in the morning is waited for.
  * A worker that was killed is noticed by its missing heartbeat. Done jobs are kept for ever, because their id is what
  * refuses a second run. Own conventions, but for the heartbeat (10 s is the shortest the queue allows).
  */

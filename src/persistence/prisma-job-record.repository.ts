@@ -23,6 +23,9 @@ interface Row {
   finishedAt: Date | null;
 }
 
+/** A run still "running" so long after it was claimed may have been killed where no queue looks after it. */
+const ABANDONED_MS = 45 * 60_000;
+
 const progress = z.object({ steps: z.array(z.string()), note: z.string().optional() });
 
 @Injectable()
@@ -37,12 +40,13 @@ export class PrismaJobRecordRepository extends JobRecordRepository {
     return new Map(rows.map(({ id, name }) => [id, name]));
   }
 
-  async claimed(runs: readonly JobKey[]): Promise<JobKey[]> {
+  async claimed(runs: readonly JobKey[], now: Date): Promise<JobKey[]> {
     if (runs.length === 0) return [];
     const rows = await currentTransaction().jobRecord.findMany({
       where: {
         job: { in: [...new Set(runs.map(({ job }) => job))] },
         period: { in: [...new Set(runs.map(({ period }) => period))] },
+        NOT: [{ state: 'failed' }, { state: 'running', claimedAt: { lt: new Date(now.getTime() - ABANDONED_MS) } }],
       },
       select: { job: true, squadId: true, period: true },
     });

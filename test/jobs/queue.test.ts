@@ -170,6 +170,30 @@ describe('an attempt', () => {
     expect(await recordOf(clubId, key)).toMatchObject({ state: 'done', attempts: 2, progress: { note: 'fast' } });
   });
 
+  it('that failed, or was killed where no queue looks after it, is taken up again by the schedule', async () => {
+    const { clubId, key } = await setUp();
+    const claimed = async (minutes: number) =>
+      one.unitOfWork.runAsOperator(() =>
+        one.repository.claimed([key], new Date(clock.now().getTime() + minutes * 60_000)),
+      );
+    const mine = (keys: JobKey[]) => keys.filter(({ squadId }) => squadId === key.squadId);
+    // As the command does: begun without the queue, and killed.
+    await inClub(clubId, () => one.records.begin(key));
+    expect(mine(await claimed(0))).toHaveLength(1);
+    expect(mine(await claimed(46))).toEqual([]);
+    await expect(
+      one.runner.run(
+        handler(async () => Promise.reject(new Error('x'))),
+        clubId,
+        key,
+        false,
+      ),
+    ).rejects.toThrow('x');
+    expect(mine(await claimed(0))).toEqual([]);
+    expect(await inClub(clubId, () => one.records.claim(clubId, key))).toBe(true);
+    expect(mine(await claimed(46))).toHaveLength(1);
+  });
+
   it('that fails last leaves the record failed, and a person may have it queued once more', async () => {
     const { clubId, key } = await setUp();
     const broken = handler(async () => Promise.reject(new Error('x')));

@@ -14,8 +14,8 @@ export abstract class JobRecordRepository {
   abstract squadsOfAllClubs(): Promise<ScheduledSquad[]>;
   /** Operator only: names of all clubs by id. */
   abstract clubNames(): Promise<Map<string, string>>;
-  /** Operator only: those of the runs that have a record. */
-  abstract claimed(runs: readonly JobKey[]): Promise<JobKey[]>;
+  /** Operator only: those of the runs that wait, run or are done; one that failed for good or was abandoned may be claimed again. */
+  abstract claimed(runs: readonly JobKey[], now: Date): Promise<JobKey[]>;
 
   /** False where there is a record already. */
   abstract insert(run: JobKey, claimedAt: Date): Promise<boolean>;
