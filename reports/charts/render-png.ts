@@ -1,5 +1,5 @@
 import { fileURLToPath } from 'node:url';
-import { Resvg } from '@resvg/resvg-js';
+import { renderAsync } from '@resvg/resvg-js';
 import * as echarts from 'echarts';
 import type { EChartsOption } from 'echarts';
 
@@ -15,17 +15,20 @@ const fonts = ['400Regular/Arimo_400Regular.ttf', '700Bold/Arimo_700Bold.ttf'].m
   fileURLToPath(import.meta.resolve(`@expo-google-fonts/arimo/${file}`)),
 );
 
-/** Draws a chart without a browser: to SVG, then to PNG with a font that is brought along, so that bytes never differ. */
-export function renderPng(option: EChartsOption, width: number, height: number): Picture {
+/**
+ * Draws a chart without a browser: to SVG, then to PNG with a font that is brought along, so that bytes never differ.
+ * The PNG is made beside the event loop, which has heartbeats and requests to look after.
+ */
+export async function renderPng(option: EChartsOption, width: number, height: number): Promise<Picture> {
   const chart = echarts.init(null, null, { renderer: 'svg', ssr: true, width, height });
   try {
     chart.setOption({ animation: false, textStyle: { fontFamily: 'Arimo' }, backgroundColor: '#ffffff', ...option });
     const svg = chart.renderToSVGString();
-    const resvg = new Resvg(svg, {
+    const picture = await renderAsync(svg, {
       fitTo: { mode: 'width', value: SCALE * width },
       font: { loadSystemFonts: false, fontFiles: fonts, defaultFontFamily: 'Arimo' },
     });
-    return { png: Buffer.from(resvg.render().asPng()), width, height };
+    return { png: Buffer.from(picture.asPng()), width, height };
   } finally {
     chart.dispose();
   }

@@ -23,6 +23,10 @@ type Athlete = SquadWeek['athletes'][number];
 
 const LEVELS: readonly Level[] = ['act', 'watch', 'note', 'none'];
 const KINDS = Object.keys(KIND_WORDS);
+/** While one of these is open, load figures do not speak. */
+const MUTING: readonly string[] = ['return', 'planned-overload'];
+/** Of 7 and of 28: the floors of the windows. */
+const [FEWEST_ACUTE, FEWEST_CHRONIC] = [6, 24];
 
 /** Everything the Monday report says, from the squad's week and its flags. */
 export function buildView({ squad, week, flags, thresholdsChanged, previous }: ViewInput): SquadWeekView {
@@ -54,6 +58,7 @@ export function buildView({ squad, week, flags, thresholdsChanged, previous }: V
     ),
   );
   const talk = athletes.filter((athlete) => athlete.talk).map(({ name }) => name);
+  const thin = unjudged(sorted);
   return {
     schema: 1,
     squad,
@@ -62,10 +67,11 @@ export function buildView({ squad, week, flags, thresholdsChanged, previous }: V
     to: week.to,
     asOf: week.lastDay,
     readOn: sorted.find(({ series }) => series !== null)?.series?.after.day ?? null,
-    headline: headline(talk, athletes.length, week.lastDay, week.from),
+    headline: headline(talk, { athletes: athletes.length, unjudged: thin }, week.lastDay, week.from),
     talk,
+    unjudged: thin,
     line: squadFigures(week, athletes),
-    changes: changesSince(previous, measures),
+    changes: changesSince(previous, measures, new Set(silenced(athletes, measures))),
     athletes,
     measures,
     charts: sorted
@@ -76,14 +82,39 @@ export function buildView({ squad, week, flags, thresholdsChanged, previous }: V
   };
 }
 
-function headline(talk: readonly string[], athletes: number, lastDay: string | null, from: string): string {
+function headline(
+  talk: readonly string[],
+  { athletes, unjudged: thin }: { athletes: number; unjudged: number },
+  lastDay: string | null,
+  from: string,
+): string {
+  if (athletes === 0) return 'Nobody belongs to the squad.';
   if (lastDay === null) return 'No day is closed yet: there is nothing to compare.';
   const late = lastDay < from ? ' No day of this week is closed yet.' : '';
-  if (talk.length === 0) return `Nobody needs a talk.${late}`;
+  if (talk.length === 0 && thin === athletes) return `The log is too thin to say who needs a talk.${late}`;
+  const unsaid = thin === 0 ? '' : ` Too thin a log to judge: ${thin} of ${athletes}.`;
+  if (talk.length === 0) return `Nobody needs a talk.${unsaid}${late}`;
   const limit = nameLimit(athletes);
   const named = talk.slice(0, limit).join(', ');
   const rest = talk.length > limit ? ` and ${talk.length - limit} more` : '';
-  return `${talk.length} of ${athletes} ${talk.length === 1 ? 'needs' : 'need'} a talk: ${named}${rest}.${late}`;
+  return `${talk.length} of ${athletes} ${talk.length === 1 ? 'needs' : 'need'} a talk: ${named}${rest}.${unsaid}${late}`;
+}
+
+/** Athletes without a ratio because too few days are known; a return or a change of basis is another reason. */
+function unjudged(athletes: readonly Athlete[]): number {
+  return athletes.filter(({ series }) => {
+    const ratio = series?.rows.at(-1)?.ratio;
+    if (ratio === undefined) return true;
+    const { acute, chronic } = ratio.knownDays;
+    return ratio.value === null && (acute < FEWEST_ACUTE || chronic < FEWEST_CHRONIC);
+  }).length;
+}
+
+/** Athletes of whom the end of a flag says nothing: not available, on the way back, or in a planned overload. */
+function silenced(athletes: readonly AthleteLine[], measures: readonly AthleteMeasures[]): string[] {
+  const away = athletes.filter(({ availability }) => ['not available', 'away', '–'].includes(availability));
+  const muted = measures.filter(({ flags }) => flags.some(({ kind }) => MUTING.includes(kind)));
+  return [...away, ...muted].map(({ athleteId }) => athleteId);
 }
 
 function rank(flag: { level: Level; kind: string }): number {

@@ -12,36 +12,54 @@ export const KIND_WORDS: Record<string, string> = {
   'thresholds-out-of-date': 'old test',
 };
 
-const NAMED = 5;
+/** A change names few: the mail of a new version says it above its own names. */
+const NAMED = 1;
 
-/** What is new, better and unchanged against last week's report. */
-export function changesSince(previous: SquadWeekView | null, measures: readonly AthleteMeasures[]): Changes {
+/**
+ * What is new, better and unchanged against last week's report. A flag that ended and was raised again is new. Better is
+ * only who is still in the squad and about whom the figures speak.
+ * @param silent athletes of whom the end of a flag says nothing: absent, returning, in a planned overload
+ */
+export function changesSince(
+  previous: SquadWeekView | null,
+  measures: readonly AthleteMeasures[],
+  silent: ReadonlySet<string>,
+): Changes {
   if (previous === null) return { since: null, fresh: [], better: [], unchanged: [] };
   const now = flagged(measures);
   const then = flagged(previous.measures);
-  const words = (keys: string[], from: Map<string, string>): string[] => keys.map((key) => from.get(key)!);
+  const members = new Set(measures.map(({ athleteId }) => athleteId));
+  const same = ({ key, since }: Flagged): boolean => then.get(key)?.since === since;
+  const words = (flags: Flagged[]): string[] => flags.map((flag) => flag.words);
   return {
     since: previous.isoWeek,
-    fresh: words(
-      [...now.keys()].filter((key) => !then.has(key)),
-      now,
-    ),
+    fresh: words([...now.values()].filter((flag) => !same(flag))),
     // The end of a planned block is neither better nor worse.
     better: words(
-      [...then.keys()].filter((key) => !now.has(key) && !key.endsWith(' planned-overload')),
-      then,
+      [...then.values()].filter(
+        ({ key, athleteId, kind }) =>
+          !now.has(key) && kind !== 'planned-overload' && members.has(athleteId) && !silent.has(athleteId),
+      ),
     ),
-    unchanged: words(
-      [...now.keys()].filter((key) => then.has(key)),
-      now,
-    ),
+    unchanged: words([...now.values()].filter(same)),
   };
 }
 
-function flagged(measures: readonly AthleteMeasures[]): Map<string, string> {
+interface Flagged {
+  key: string;
+  athleteId: string;
+  kind: string;
+  since: string;
+  words: string;
+}
+
+function flagged(measures: readonly AthleteMeasures[]): Map<string, Flagged> {
   return new Map(
     measures.flatMap(({ athleteId, name, flags }) =>
-      flags.map(({ kind }): [string, string] => [`${athleteId} ${kind}`, `${name} (${KIND_WORDS[kind] ?? kind})`]),
+      flags.map(({ kind, since }): [string, Flagged] => {
+        const key = `${athleteId} ${kind}`;
+        return [key, { key, athleteId, kind, since, words: `${name} (${KIND_WORDS[kind] ?? kind})` }];
+      }),
     ),
   );
 }
@@ -61,8 +79,10 @@ export function differences(before: SquadWeekView, after: SquadWeekView): string
     return what.length === 0 ? [] : [`${athlete.name}: ${what.join(', ')}`];
   });
   const left = before.measures.filter(({ athleteId }) => !after.measures.some((one) => one.athleteId === athleteId));
-  parts.push(...changed.slice(0, NAMED), ...left.map(({ name }) => `${name}: no longer in the squad`));
-  if (changed.length > NAMED) parts.push(`and ${changed.length - NAMED} more athletes`);
+  const all = [...changed, ...left.map(({ name }) => `${name}: no longer in the squad`)];
+  parts.push(...all.slice(0, NAMED));
+  if (all.length > NAMED)
+    parts.push(`and ${all.length - NAMED} more ${all.length - NAMED === 1 ? 'athlete' : 'athletes'}`);
   return parts.length === 0 ? 'Wording, policy or comparison with last week changed' : parts.join('; ');
 }
 

@@ -34,7 +34,9 @@ function subject(view: SquadWeekView, { version }: Edition): string {
     view.asOf === null
       ? 'no day closed yet'
       : count === 0
-        ? 'nobody needs a talk'
+        ? view.unjudged === view.athletes.length
+          ? 'too thin a log to judge'
+          : 'nobody needs a talk'
         : `${count} of ${view.athletes.length} ${count === 1 ? 'needs' : 'need'} a talk`;
   const name = view.squad.name.replaceAll(/\s+/g, ' ');
   return `${name}, ${weekWords(view.isoWeek)}: ${who}${version > 1 ? ` (version ${version})` : ''}`;
@@ -50,7 +52,7 @@ function contentOf(view: SquadWeekView, { version, change }: Edition): Content {
   return {
     title: `${view.squad.name}, ${weekWords(view.isoWeek)}`,
     headline: view.headline,
-    edition: version > 1 ? `Version ${version}. ${change ?? ''}` : null,
+    edition: version > 1 ? `Version ${version}. ${change ?? ''}`.trim() : null,
     items: items.map((line) => ({
       name: line.name,
       level: LEVEL_WORDS[line.level],
@@ -60,12 +62,12 @@ function contentOf(view: SquadWeekView, { version, change }: Edition): Content {
     also: rest > 0 ? `Also noted: ${rest} (see the workbook).` : '',
     since:
       changes.since === null
-        ? 'First report: nothing yet to compare with.'
+        ? 'No report of the week before to compare with.'
         : `Since last Monday: ${changes.fresh.length} new, ${changes.better.length} better, ${changes.unchanged.length} unchanged.`,
     line: squadLine(view),
     asOf:
       view.asOf === null ? 'No day is closed yet.' : `All figures end on ${longDate(view.asOf)}, the last closed day.`,
-    cautions: view.cautions.slice(0, 4),
+    cautions: view.cautions,
   };
 }
 

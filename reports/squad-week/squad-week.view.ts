@@ -152,6 +152,8 @@ export interface SquadWeekView {
   headline: string;
   /** The people the headline counts. */
   talk: string[];
+  /** Athletes of whom too few days are known to compare with. */
+  unjudged: number;
   line: {
     athletes: number;
     plan: string;
@@ -219,7 +221,11 @@ export function squadLine(view: SquadWeekView): string {
   return [
     `Planned: ${line.plan}`,
     `done: ${line.sessionsDone} ${line.sessionsDone === 1 ? 'session' : 'sessions'}`,
-    away.length > 0 ? away.join(', ') : 'everybody fully available',
+    away.length > 0
+      ? away.join(', ')
+      : line.full === line.athletes && line.full > 0
+        ? 'everybody fully available'
+        : `${line.full} of ${line.athletes} fully available`,
     `log complete on ${line.daysComplete} of ${line.daysOf} athlete days (${line.closedDays} of ${line.closedOf} days closed)`,
     `key days next week: ${line.nextWeek}`,
   ].join(' · ');

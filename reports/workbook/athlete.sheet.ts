@@ -67,17 +67,21 @@ export function athleteSheet(
   sheet.pageSetup.fitToHeight = 1;
 }
 
+/** Sheets that come later, and a name Excel keeps for itself. */
+const RESERVED = ['method', 'history'];
+
 /** A name Excel takes: at most 31 characters, without : \ / ? * [ ] and apostrophes at the ends, and not used yet. */
 export function sheetName(workbook: Workbook, name: string): string {
-  const clean = name
-    .replaceAll(/[:\\/?*[\]\p{Cc}]/gu, ' ')
-    .trim()
-    .replaceAll(/^'+|'+$/g, '');
-  const base = clean.slice(0, 31).trim() || 'Athlete';
-  const taken = new Set(workbook.worksheets.map((sheet) => sheet.name.toLowerCase()));
-  if (!taken.has(base.toLowerCase()) && base.toLowerCase() !== 'history') return base;
+  const clean = name.replaceAll(/[:\\/?*[\]\p{Cc}]/gu, ' ');
+  const base = bare(bare(clean).slice(0, 31)) || 'Athlete';
+  const taken = new Set([...RESERVED, ...workbook.worksheets.map((sheet) => sheet.name.toLowerCase())]);
+  if (!taken.has(base.toLowerCase())) return base;
   for (let n = 2; ; n += 1) {
-    const next = `${base.slice(0, 27).trim()} ${n}`;
+    const next = `${bare(base.slice(0, 27))} ${n}`;
     if (!taken.has(next.toLowerCase())) return next;
   }
+}
+
+function bare(name: string): string {
+  return name.replaceAll(/^['\s]+|['\s]+$/g, '');
 }

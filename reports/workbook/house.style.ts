@@ -86,6 +86,9 @@ export function heads(sheet: Worksheet, row: number, titles: readonly string[], 
   });
 }
 
+/** Short enough also when every character is an ampersand, which is written twice. */
+const FOOTER_CHARACTERS = 110;
+
 /** Landscape A4, one page wide, head rows on every page. */
 export function page(sheet: Worksheet, headRows: number, columns: number, footer: string): void {
   sheet.pageSetup = {
@@ -98,7 +101,9 @@ export function page(sheet: Worksheet, headRows: number, columns: number, footer
     margins: { left: 0.4, right: 0.4, top: 0.45, bottom: 0.55, header: 0.2, footer: 0.25 },
     printTitlesRow: `1:${headRows}`,
   };
-  sheet.headerFooter.oddFooter = `&L&8${footer.replaceAll('&', '&&')}&R&8Page &P of &N`;
+  // The space ends the size, which would swallow a digit; Excel takes 255 characters at most.
+  const words = footer.slice(0, FOOTER_CHARACTERS).replaceAll('&', '&&');
+  sheet.headerFooter.oddFooter = `&L&8 ${words}&R&8 Page &P of &N`;
   sheet.views = [{ state: 'frozen', ySplit: headRows, xSplit: columns, showGridLines: false }];
 }
 

@@ -83,7 +83,7 @@ function athleteRow(row: Row, line: AthleteLine): void {
 
 /** What is new, better and unchanged since last Monday. */
 export function changeLines(changes: Changes): string[] {
-  if (changes.since === null) return ['First report: nothing yet to compare with.'];
+  if (changes.since === null) return ['No report of the week before to compare with.'];
   const list = (names: readonly string[]): string => (names.length === 0 ? 'nobody' : names.join('; '));
   return [
     `Since last Monday. New: ${list(changes.fresh)}. Better: ${list(changes.better)}. Unchanged: ${list(changes.unchanged)}.`,

@@ -24,7 +24,8 @@ export async function squadWeekWorkbook(view: SquadWeekView, edition: Edition): 
   for (const chart of view.charts) {
     const measures = view.measures.find(({ athleteId }) => athleteId === chart.athleteId);
     if (measures === undefined) throw new Error('a chart without its athlete');
-    athleteSheet(workbook, view, chart, measures, renderPng(athleteChart(chart), CHART_WIDTH, CHART_HEIGHT));
+    const picture = await renderPng(athleteChart(chart), CHART_WIDTH, CHART_HEIGHT);
+    athleteSheet(workbook, view, chart, measures, picture);
     altTexts.push(chart.altText);
   }
   methodSheet(workbook, view);

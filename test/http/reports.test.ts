@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, test } from '@jest/globals';
 import { ReportDeliveriesService } from '../../src/features/reports/report-deliveries.service.ts';
 import { ReportRepository } from '../../src/features/reports/reports.repository.ts';
@@ -5,6 +6,7 @@ import { ReportsService } from '../../src/features/reports/reports.service.ts';
 import { SquadsService } from '../../src/features/squads/squads.service.ts';
 import { MailTransport } from '../../src/platform/mail/mail-transport.ts';
 import type { MailReceipt, OutgoingMail } from '../../src/platform/mail/mail-transport.ts';
+import { UnavailableError } from '../../src/platform/errors.ts';
 import { UnitOfWork } from '../../src/platform/unit-of-work.ts';
 import { startTestApp } from '../support/app.ts';
 import type { TestApp, TestClub } from '../support/app.ts';
@@ -75,7 +77,11 @@ describe('the record', () => {
 
   test('says what it knows and withholds the rest with the reason', async () => {
     const { body } = await get(`/v1/reports/${first}`);
-    expect(body.view).toMatchObject({ headline: 'Nobody needs a talk.', asOf: '2026-03-01', readOn: '2026-03-02' });
+    expect(body.view).toMatchObject({
+      headline: 'The log is too thin to say who needs a talk.',
+      asOf: '2026-03-01',
+      readOn: '2026-03-02',
+    });
     expect(body.view.changes.since).toBeNull();
     const anna = (body.view as { measures: (Named & { longLoad: { units: number } })[] }).measures.find(
       ({ name }) => name === '=Anna',
@@ -93,7 +99,8 @@ describe('the record', () => {
     const { response, content } = await workbook(first);
     expect(response.headers.get('content-type')).toContain('spreadsheetml.sheet');
     expect(response.headers.get('content-disposition')).toContain('loadweir-zlute-veslo-co-2026-W09-v1.xlsx');
-    expect(response.headers.get('etag')).toMatch(/^"[0-9a-f]{64}"$/);
+    const hash = createHash('sha256').update(content).digest('hex');
+    expect(response.headers.get('etag')).toBe(`"${hash}"`);
     const { names, table } = await readWorkbook(content);
     expect(names).toEqual(['Monday', 'Measures', 'Method']);
     expect(table('Measures').value('=Anna', 'Rating load, week')).toBe(300);
@@ -126,7 +133,7 @@ describe('the record', () => {
     expect(next.status).toBe(201);
     const { view } = (await get(`/v1/reports/${next.body.id}`)).body;
     expect(view).toMatchObject({ changes: { since: '2026-W09' }, line: { closedDays: 0 } });
-    expect(view.headline).toBe('Nobody needs a talk. No day of this week is closed yet.');
+    expect(view.headline).toBe('The log is too thin to say who needs a talk. No day of this week is closed yet.');
   });
 
   test.each([
@@ -153,11 +160,13 @@ describe('the record', () => {
 describe('delivery', () => {
   class Postman extends MailTransport {
     readonly sent: OutgoingMail[] = [];
+    deferred: string | undefined;
     constructor(public fault: 'none' | 'unreachable' | 'refused' = 'none') {
       super();
     }
     async send(mail: OutgoingMail): Promise<MailReceipt> {
-      if (this.fault === 'unreachable') throw new Error('no route to the mail server');
+      if (this.fault === 'unreachable') throw new UnavailableError('no route to the mail server');
+      if (mail.to[0] === this.deferred) throw new UnavailableError('mailbox full, try later');
       if (this.fault === 'refused') return { accepted: false, detail: '550 no such person' };
       this.sent.push(mail);
       return { accepted: true, detail: '250 ok' };
@@ -191,7 +200,7 @@ describe('delivery', () => {
     const [mail] = postman.sent;
     expect(mail).toMatchObject({
       messageId: `<report.${reportId}.${coach.personId}@club.example>`,
-      subject: 'Žluté veslo & "Co", week 9: nobody needs a talk (version 2)',
+      subject: 'Žluté veslo & "Co", week 9: too thin a log to judge (version 2)',
       attachments: [{ filename: 'loadweir-zlute-veslo-co-2026-W09-v2.xlsx' }],
     });
     expect(mail!.attachments[0]!.content.equals((await workbook(reportId)).content)).toBe(true);
@@ -217,5 +226,20 @@ describe('delivery', () => {
     expect(items).toContainEqual(
       expect.objectContaining({ personId: second.personId, state: 'failed', detail: '550 no such person' }),
     );
+  });
+
+  test('one coach whose server wants to wait does not keep the others waiting', async () => {
+    const { body } = await make({ isoWeek: '2026-W07' });
+    const reportId = (body as Named).id;
+    const waiting = async () =>
+      (await get(`/v1/reports/${reportId}/deliveries`)).body.items as { state: string; email: string }[];
+    await inUnit(() => service(new Postman()).prepare(reportId));
+    const postman = new Postman();
+    postman.deferred = (await waiting())[0]!.email;
+    await expect(service(postman).deliver(reportId, inUnit)).rejects.toThrow('try later');
+    const states = (await waiting()).map(({ state }) => state);
+    expect(states[0]).toBe('waiting');
+    expect(states.slice(1)).toEqual(states.slice(1).map(() => 'sent'));
+    expect(states.length).toBeGreaterThan(1);
   });
 });

@@ -53,9 +53,11 @@ describe('first sheet', () => {
 
   test('says first who needs a talk, then what was planned and done, then what changed', () => {
     const monday = sheet('Monday');
-    expect(monday.getCell(2, 1).value).toBe('1 of 7 needs a talk: =HYPERLINK("http://x.example","y").');
+    expect(monday.getCell(2, 1).value).toBe(
+      '1 of 7 needs a talk: =HYPERLINK("http://x.example","y"). Too thin a log to judge: 2 of 7.',
+    );
     expect(monday.getCell(3, 1).value).toMatch(/^Planned: no plan · done: \d+ sessions · .*log complete on \d+ of 49/);
-    expect(monday.getCell(4, 1).value).toBe('First report: nothing yet to compare with.');
+    expect(monday.getCell(4, 1).value).toBe('No report of the week before to compare with.');
   });
 
   test('level is a word with a shape, in a colour that is neither red, amber nor green', () => {
@@ -159,4 +161,25 @@ test('the sheet Method prints policy, sources and own conventions, and how missi
     expect(all).toContain(part);
   }
   expect(all).not.toMatch(/\brisk/i);
+});
+
+test('an athlete may be called like one of the sheets, or end in an apostrophe where the name is cut', async () => {
+  const names = ['method', 'Monday', 'measures', 'History', `Bartholomew of the Long River ’'x`, "'s Gravenzande'"];
+  const members = names.map((name) => ({ name, story: 'jump' as const }));
+  const read = new ExcelJS.Workbook();
+  await read.xlsx.load((await squadWeekWorkbook(inventedView(members), first)) as unknown as ArrayBuffer);
+  const sheets = read.worksheets.map(({ name }) => name);
+  expect(sheets).toHaveLength(names.length + 3);
+  expect(new Set(sheets.map((name) => name.toLowerCase())).size).toBe(sheets.length);
+  for (const name of sheets) expect(name).toMatch(/^[^'\s](.{0,29}[^'\s])?$/);
+});
+
+test('a squad whose name begins with a digit does not change the size of the footer', async () => {
+  const view8 = { ...inventedView([{ name: 'Anna', story: 'jump' }]), squad: { ...view.squad, name: '8+ & 4x' } };
+  const read = new ExcelJS.Workbook();
+  await read.xlsx.load((await squadWeekWorkbook(view8, first)) as unknown as ArrayBuffer);
+  for (const { headerFooter } of read.worksheets) {
+    expect(headerFooter.oddFooter).toMatch(/^&L&8 /);
+    expect(headerFooter.oddFooter!.length).toBeLessThan(256);
+  }
 });
