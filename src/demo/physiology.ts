@@ -1,6 +1,6 @@
 import { addDays } from './days.ts';
 import { between, wholeBetween } from './seeded.ts';
-import { athleteKey, loadKey } from './cast.ts';
+import { loadKey } from './cast.ts';
 import type { ScenarioAthlete, ThresholdBatch, ThresholdEntry } from './scenario.types.ts';
 
 /** What an athlete's test gave: the intensities every session is prescribed from. */
@@ -100,6 +100,3 @@ function entries(test: Tested, validFrom: string): ThresholdEntry[] {
     { quantity: 'resting-heart-rate', value: test.restingBpm, method: 'on waking, lying', validFrom },
   ];
 }
-
-/** The drifting athlete, whose twin shares the training but not the body. */
-export const driftingKey = athleteKey(0);

@@ -1,5 +1,5 @@
 import { describe, expect, test } from '@jest/globals';
-import { etag, ifMatch, requireVersion } from '../../src/delivery/http/if-match.ts';
+import { etag, ifMatch } from '../../src/delivery/http/if-match.ts';
 import type { AppRequest } from '../../src/delivery/http/request.types.ts';
 
 const asked = (value?: string) => ({ headers: value === undefined ? {} : { 'if-match': value } }) as AppRequest;
@@ -14,9 +14,5 @@ describe('the version a change is based on', () => {
   });
   test.each(['*', 'v1', 'W/"v1"', '"v1", "v2"', '"v-1"', '"v1234567890"'])('%s is not one', (value) => {
     expect(() => ifMatch(asked(value))).toThrow(expect.objectContaining({ status: 400 }));
-  });
-  test('has to be the present one', () => {
-    expect(() => requireVersion(3, 3)).not.toThrow();
-    expect(() => requireVersion(3, 2)).toThrow(expect.objectContaining({ status: 412 }));
   });
 });

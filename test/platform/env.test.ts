@@ -38,7 +38,7 @@ describe('readEnv', () => {
         LOADWEIR_OPERATOR_KEY: 'too short',
         SMTP_URL: 'mail.example.org',
         LOG_LEVEL: 'loud',
-        PUBLIC_URL: 'ftp://example.org',
+        MAIL_FROM: 'abc',
         LOADWEIR_FIXED_TODAY: '2026-02-30',
         LOADWEIR_MODE: 'staging',
         LOADWEIR_CLOCK_OFFSET_MS: 'soon',
@@ -51,8 +51,8 @@ describe('readEnv', () => {
       'LOADWEIR_MODE',
       'LOADWEIR_OPERATOR_KEY',
       'LOG_LEVEL',
+      'MAIL_FROM',
       'PORT',
-      'PUBLIC_URL',
       'SMTP_URL',
     ]);
     const lines = error.message.split('\n');
@@ -140,4 +140,8 @@ test('a service started from here reads the same, as the role that owns nothing 
   const { DATABASE_URL: _, LOADWEIR_FIXED_TODAY: __, ...rest } = env;
   expect(readEnv(handed)).toEqual({ ...rest, PORT: 0 });
   expect(rest.LOADWEIR_CLOCK_OFFSET_MS).not.toBe(0);
+});
+
+test.each(['a@b.example', 'Loadweir <reports@club.example>', 'loadweir@localhost.example'])('%s may send', (from) => {
+  expect(readEnv({ MAIL_FROM: from }).MAIL_FROM).toBe(from);
 });

@@ -11,7 +11,7 @@ export function told(summary: Summary, made: MadeReport, seconds: { logging: num
     '',
     `${summary.club} · ${summary.squad} · ${summary.isoWeek}`,
     `${counts.athleteSessions} sessions of ${counts.athletes} athletes over 12 weeks, ` +
-      `logged over HTTP in ${seconds.logging.toFixed(1)} s; ${counts.closedDays} of ${counts.days} days closed.`,
+      `${made.fresh ? 'logged' : 'looked through'} over HTTP in ${seconds.logging.toFixed(1)} s; ${counts.closedDays} of ${counts.days} days closed.`,
     '',
     summary.headline,
     ...flagged(summary),
@@ -23,11 +23,14 @@ export function told(summary: Summary, made: MadeReport, seconds: { logging: num
   ];
 }
 
+const LEVELS = ['act', 'watch', 'note'];
+
 function flagged({ athletes }: Summary): string[] {
   const rows = athletes.flatMap(({ name, flags }) =>
     flags.map(({ level, kind, since, sentence }) => ({ name, level, kind, since, sentence })),
   );
   if (rows.length === 0) return ['Nobody is flagged.'];
+  rows.sort((a, b) => LEVELS.indexOf(a.level) - LEVELS.indexOf(b.level));
   const width = Math.max(...rows.map(({ name }) => name.length));
   return rows.map(
     ({ name, level, kind, since, sentence }) =>

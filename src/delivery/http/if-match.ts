@@ -1,4 +1,4 @@
-import { PreconditionFailedError, PreconditionRequiredError, ValidationError } from '../../platform/errors.ts';
+import { PreconditionRequiredError, ValidationError } from '../../platform/errors.ts';
 import type { AppReply, AppRequest } from './request.types.ts';
 
 /** The entity tag of a version: `"v3"`. */
@@ -26,9 +26,4 @@ export function ifMatch(request: AppRequest): number {
     throw new ValidationError([{ field: 'If-Match', value: given.slice(0, 100), allowed: 'one ETag such as "v3"' }]);
   }
   return Number(version);
-}
-
-/** @throws {PreconditionFailedError} 412 when it was changed since */
-export function requireVersion(current: number, based: number): void {
-  if (current !== based) throw new PreconditionFailedError();
 }

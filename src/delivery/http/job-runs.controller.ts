@@ -17,7 +17,6 @@ export class JobRunsController {
   constructor(private readonly runs: JobRunsService) {}
 
   @Post()
-  @ApiOperation({ summary: 'Ask for a run of a job now; a run that was asked for or done is not repeated.' })
   @HttpCode(202)
   @Access('jobs.run', { kind: 'squad', param: 'squadId' })
   @ApiOperation({ summary: 'Have a job run for a period; not queued if that run waits, is under way or is done' })
@@ -31,7 +30,6 @@ export class JobRunsController {
   }
 
   @Get()
-  @ApiOperation({ summary: 'What became of the squad’s job runs.' })
   @Access('jobs.run', { kind: 'squad', param: 'squadId' })
   @ApiOperation({ summary: 'The newest hundred runs of the squad’s jobs and what became of them' })
   @ApiOkResponse({ standardSchema: jobRunListSchema })

@@ -1,4 +1,4 @@
-import { dayNumber, isoDay, mondayOf } from '../../core/series/day.ts';
+import { dayNumber, mondayOf } from '../../core/series/day.ts';
 import { median } from '../../core/series/median.ts';
 import type { DomainMinutes, Measure } from '../../core/types.ts';
 import type { DayRecord } from '../days/days.types.ts';
@@ -86,10 +86,4 @@ function weekShare(records: readonly DayRecord[], monday: number, measure: Measu
   if (!(usual > 0)) return { ...none, withheld: 'own usual week is 0' };
   const atLeast = now.knownDays < WEEK;
   return { value: (100 * now.sum) / usual, atLeast, withheld: null, usualWeeks: full.length };
-}
-
-/** Monday and Sunday of the week of a day. */
-export function weekOf(day: string): { from: string; to: string } {
-  const monday = mondayOf(dayNumber(day));
-  return { from: isoDay(monday), to: isoDay(monday + WEEK - 1) };
 }

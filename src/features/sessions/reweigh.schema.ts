@@ -18,6 +18,3 @@ export const reweighScopeSchema = z.discriminatedUnion('kind', [
   }),
   z.object({ kind: z.literal('policy'), squadId: z.uuid(), from: z.string() }),
 ]);
-
-/** What the queue carries for a task. */
-export const reweighJobSchema = z.strictObject({ clubId: z.uuid(), taskId: z.uuid() });

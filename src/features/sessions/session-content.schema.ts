@@ -58,7 +58,6 @@ export const sessionContentInputSchema = z.discriminatedUnion('kind', [
   domainMinutesSchema,
   z.strictObject({ kind: z.literal('strength'), sets: lines(strengthSetSchema) }),
 ]);
-export type SessionContentInput = z.output<typeof sessionContentInputSchema>;
 
 /** The same as it is stored and answered. */
 export const storedContentSchema = z.discriminatedUnion('kind', [
