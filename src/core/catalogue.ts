@@ -1,6 +1,7 @@
 import { chartMethods } from './catalogue/chart-methods.ts';
 import { closedFormMethods } from './catalogue/closed-form-methods.ts';
 import { domainMethods } from './catalogue/domain-methods.ts';
+import { effortMethods } from './catalogue/effort-methods.ts';
 import { flagMethods } from './catalogue/flag-methods.ts';
 import { heartRateMethods } from './catalogue/heart-rate-methods.ts';
 import { loadMethods } from './catalogue/load-methods.ts';
@@ -28,6 +29,7 @@ export const catalogue: readonly Method[] = [
   ...monitoringMethods,
   ...resultMethods,
   ...chartMethods,
+  ...effortMethods,
   ...flagMethods,
   ...measureMethods,
 ];

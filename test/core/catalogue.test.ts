@@ -8,6 +8,14 @@ const gains = { k1: 1, k2: 2, tau1: 45, tau2: 15 };
 const known = [0, 1, 2].map((day) => ({ day, state: 'known', value: 60 }));
 const concernDay = { ratio: 1.6, chronic: 50, monotony: null, strain: null, muted: null, spike: null };
 
+const marks = { inBaseline: true, judged: true };
+const minutes = { moderate: 60, heavy: 0, severe: 0, extreme: 0 };
+const session = { day: 3, id: 's', modality: 'rowing', totalMin: 60, minutes, rating: 3, ...marks };
+const relation = {
+  ...{ status: 'converged', from: 0, to: 55, pairs: 20, modalities: ['rowing'], coefficients: [2, 0, 0, 0], sd: 1 },
+  ...{ factor: { kept: [0], lower: [[4]] }, dependent: [] },
+};
+
 /** A fitting input of every method, and what it gives. */
 const inputs: Readonly<Record<string, [object, unknown]>> = {
   'session-rating-load': [{ rating: 7, durationMin: 120 }, 840],
@@ -114,6 +122,20 @@ const inputs: Readonly<Record<string, [object, unknown]>> = {
   'ewma-limit': [{ sd: 2, weight: 1, width: 3, count: 1 }, 6],
   'average-run-length-cusum': [{ slack: 0.5, limit: 4, shift: 1 }, expect.closeTo(8.38, 2)],
   'average-run-length-ewma': [{ weight: 0.2, width: 2.962, shift: 1 }, expect.closeTo(10.54, 2)],
+  'huber-regression': [
+    { rows: [[1], [1], [1]], values: [1, 2, 3], options: { leastScale: 1 } },
+    expect.objectContaining({ status: 'converged', coefficients: [expect.closeTo(2, 9)], weights: [1, 1, 1] }),
+  ],
+  'censored-mean': [{ bound: 0, centre: 0, sd: 1 }, expect.closeTo(Math.sqrt(2 / Math.PI), 9)],
+  'rating-relation': [{ sessions: [session], day: 30 }, null],
+  'expected-rating': [
+    { relation, session: { modality: 'running', totalMin: 60, minutes: session.minutes } },
+    { rating: NaN, spread: NaN },
+  ],
+  'effort-mismatch': [
+    { sessions: [session], from: 3, to: 3, options: { weight: 0.1 } },
+    [expect.objectContaining({ day: 3, sessions: [], sign: null })],
+  ],
   'basis-mix-shift': [{ acute: { power: 5 }, chronic: { power: 5, speed: 5 } }, 50],
 };
 

@@ -43,9 +43,15 @@ export const HELPERS: Readonly<Record<string, string>> = {
   'flags/types.ts': 'types',
   'flags/constituent.ts': 'the fold the measures share',
   'flags/load-concern-settings.ts': 'checks of settings',
+  'response-signs/session-work.ts': 'types and columns',
+  'response-signs/sign-run.ts': 'the fold the families share',
+  'response-signs/types.ts': 'types',
+  'numeric/cholesky.ts': 'linear algebra',
   'numeric/gauss-legendre.ts': 'points of integration',
+  'numeric/median-in-place.ts': 'the median, in place',
   'numeric/normal.ts': 'the normal distribution',
   'numeric/solve-linear.ts': 'linear algebra',
+  'numeric/weighted-least-squares.ts': 'linear algebra',
 };
 
 /** Functions that are part of another method and stand in no table. */

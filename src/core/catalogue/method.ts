@@ -24,7 +24,7 @@ export interface MethodInput {
   readonly fields?: Readonly<Record<string, FieldKind>>;
 }
 
-export type InputKind = 'number' | 'numbers' | 'text' | 'rows' | 'record' | 'flexible';
+export type InputKind = 'number' | 'numbers' | 'table' | 'text' | 'rows' | 'record' | 'flexible';
 export type FieldKind = 'number' | 'maybe-number' | 'state' | 'flag' | 'any';
 
 /** How the methods name what is known of their source. */
@@ -36,4 +36,5 @@ export const PROVENANCE = {
   own: 'own convention',
   practice: 'common practice, no source',
   mixed: 'published limits; the rest own convention',
+  form: 'published form; numbers own convention',
 } as const;

@@ -28,6 +28,11 @@ function readOne(id: string, input: MethodInput, value: unknown): unknown {
       return value;
     case 'numbers':
       return list(id, input, value).map((one, index) => number(id, `${name}[${index}]`, one, true));
+    case 'table':
+      return list(id, input, value).map((row, index) => {
+        const name = `${input.name}[${index}]`;
+        return list(id, { ...input, name }, row).map((one, place) => number(id, `${name}[${place}]`, one, true));
+      });
     case 'rows':
       return list(id, input, value).map((row, index) => record(id, `${name}[${index}]`, fields, row));
     case 'record':
