@@ -10,6 +10,7 @@ import type { Method } from './catalogue/method.ts';
 import { monitoringMethods } from './catalogue/monitoring-methods.ts';
 import { ratioMethods } from './catalogue/ratio-methods.ts';
 import { responseMethods } from './catalogue/response-methods.ts';
+import { responseSignMethods } from './catalogue/response-sign-methods.ts';
 import { resultMethods } from './catalogue/result-methods.ts';
 import { seriesMethods } from './catalogue/series-methods.ts';
 import { statisticsMethods } from './catalogue/statistics-methods.ts';
@@ -29,6 +30,7 @@ export const catalogue: readonly Method[] = [
   ...monitoringMethods,
   ...resultMethods,
   ...chartMethods,
+  ...responseSignMethods,
   ...effortMethods,
   ...flagMethods,
   ...measureMethods,

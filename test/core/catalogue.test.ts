@@ -9,6 +9,8 @@ const known = [0, 1, 2].map((day) => ({ day, state: 'known', value: 60 }));
 const concernDay = { ratio: 1.6, chronic: 50, monotony: null, strain: null, muted: null, spike: null };
 
 const marks = { inBaseline: true, judged: true };
+const errors = { heartRateTypicalError: 3, ratingTypicalError: 0.7 };
+const boutRow = { day: 3, id: 'b', key: 'easy', heartRateBpm: 140, rating: 3, ...errors, ...marks };
 const minutes = { moderate: 60, heavy: 0, severe: 0, extreme: 0 };
 const session = { day: 3, id: 's', modality: 'rowing', totalMin: 60, minutes, rating: 3, ...marks };
 const relation = {
@@ -122,6 +124,25 @@ const inputs: Readonly<Record<string, [object, unknown]>> = {
   'ewma-limit': [{ sd: 2, weight: 1, width: 3, count: 1 }, 6],
   'average-run-length-cusum': [{ slack: 0.5, limit: 4, shift: 1 }, expect.closeTo(8.38, 2)],
   'average-run-length-ewma': [{ weight: 0.2, width: 2.962, shift: 1 }, expect.closeTo(10.54, 2)],
+  'day-marks': [
+    { days: [{ ill: false, returning: false, away: true, suspect: false, disputed: false }] },
+    [{ inBaseline: false, judged: false, explained: true }],
+  ],
+  'own-baseline': [{ days: [{ day: 1, value: null, inBaseline: true, judged: true }], index: 0 }, null],
+  'morning-signs': [
+    { days: [{ day: 1, value: null, inBaseline: true, judged: true }], options: { spreads: 2 } },
+    [expect.objectContaining({ day: 1, sign: null, raised: false })],
+  ],
+  'variability-half-width': [{ sd: 1, validDays: 4 }, 0.82],
+  'variability-band': [
+    { days: [{ day: 3, value: 4, inBaseline: true, judged: true }] },
+    [expect.objectContaining({ week: expect.objectContaining({ validDays: 1 }), open: false })],
+  ],
+  'bout-verdict': [
+    { bout: { heartRateBpm: 140, rating: 2, ...errors }, expected: { heartRateBpm: 140, rating: 4 } },
+    'fitness',
+  ],
+  'standard-bouts': [{ bouts: [boutRow], from: 3, to: 3 }, [expect.objectContaining({ day: 3, measured: 0 })]],
   'huber-regression': [
     { rows: [[1], [1], [1]], values: [1, 2, 3], options: { leastScale: 1 } },
     expect.objectContaining({ status: 'converged', coefficients: [expect.closeTo(2, 9)], weights: [1, 1, 1] }),

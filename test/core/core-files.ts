@@ -43,6 +43,7 @@ export const HELPERS: Readonly<Record<string, string>> = {
   'flags/types.ts': 'types',
   'flags/constituent.ts': 'the fold the measures share',
   'flags/load-concern-settings.ts': 'checks of settings',
+  'response-signs/check-days.ts': 'checks of days',
   'response-signs/session-work.ts': 'types and columns',
   'response-signs/sign-run.ts': 'the fold the families share',
   'response-signs/types.ts': 'types',
