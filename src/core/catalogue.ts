@@ -8,6 +8,7 @@ import { loadMethods } from './catalogue/load-methods.ts';
 import { measureMethods } from './catalogue/measure-methods.ts';
 import type { Method } from './catalogue/method.ts';
 import { monitoringMethods } from './catalogue/monitoring-methods.ts';
+import { overreachingMethods } from './catalogue/overreaching-methods.ts';
 import { ratioMethods } from './catalogue/ratio-methods.ts';
 import { responseMethods } from './catalogue/response-methods.ts';
 import { responseSignMethods } from './catalogue/response-sign-methods.ts';
@@ -32,6 +33,7 @@ export const catalogue: readonly Method[] = [
   ...chartMethods,
   ...responseSignMethods,
   ...effortMethods,
+  ...overreachingMethods,
   ...flagMethods,
   ...measureMethods,
 ];

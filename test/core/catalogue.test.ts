@@ -143,6 +143,8 @@ const inputs: Readonly<Record<string, [object, unknown]>> = {
     'fitness',
   ],
   'standard-bouts': [{ bouts: [boutRow], from: 3, to: 3 }, [expect.objectContaining({ day: 3, measured: 0 })]],
+  'criterion-evidence': [{ log: { results: [], bouts: [] }, day: 3, firstSign: 3, used: [] }, null],
+  'overreaching-screen': [{ days: [{ day: 3, explained: false }], families: {}, results: [], bouts: [boutRow] }, []],
   'huber-regression': [
     { rows: [[1], [1], [1]], values: [1, 2, 3], options: { leastScale: 1 } },
     expect.objectContaining({ status: 'converged', coefficients: [expect.closeTo(2, 9)], weights: [1, 1, 1] }),
