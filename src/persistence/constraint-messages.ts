@@ -174,10 +174,12 @@ export const constraintMessages: Readonly<Record<string, ConstraintMessage>> = {
   test_definition_scale_by_kind: {
     kind: 'validation',
     field: 'kind',
-    allowed: 'a criterion with unit, direction and typicalError, or a standard-bout with ratingTypicalError',
+    allowed:
+      'unit, direction and typicalError for a criterion; typical errors of rating and heart rate for a standard-bout',
   },
   test_definition_squad_fk: { kind: 'not-found', field: 'squadId', allowed: 'a squad of the club' },
   test_definition_typical_error_range: { kind: 'validation', field: 'typicalError', allowed: 'a number above 0' },
+  test_definition_withdrawn_why: { kind: 'validation', field: 'reason', allowed: 'a reason with every withdrawal' },
   test_result_athlete_fk: { kind: 'not-found', field: 'athleteId', allowed: 'an athlete of the club' },
   test_result_definition_fk: { kind: 'not-found', field: 'definitionId', allowed: 'a test of the club' },
   test_result_heart_rate_range: {
@@ -192,7 +194,7 @@ export const constraintMessages: Readonly<Record<string, ConstraintMessage>> = {
   },
   test_result_lactate_range: { kind: 'validation', field: 'lactateMmolL', allowed: 'a number from 0.1 to 35 mmol/L' },
   test_result_once: { kind: 'conflict', field: 'day', allowed: 'a day without a result of this test' },
-  test_result_quality_known: { kind: 'rule', field: 'quality', allowed: 'ok or question' },
+  test_result_quality_known: { kind: 'rule', field: 'quality', allowed: 'ok or suspect' },
   test_result_rating_range: { kind: 'validation', field: 'rating', allowed: 'a number from 0 to 10' },
   test_result_supersedes_fk: { kind: 'not-found', field: 'resultId', allowed: 'a result of the club' },
   test_result_value_range: { kind: 'validation', field: 'value', allowed: 'a number above 0, at most 1000000' },

@@ -30,11 +30,12 @@ export class PrismaTestsRepository extends TestsRepository {
     return rows.map(definitionOf);
   }
 
-  async withdrawDefinition(id: string, at: Date): Promise<void> {
-    await currentTransaction().testDefinition.updateMany({
-      where: { clubId: currentScope().clubId, id },
-      data: { withdrawnAt: at },
+  async withdrawDefinition(id: string, reason: string, at: Date): Promise<boolean> {
+    const { count } = await currentTransaction().testDefinition.updateMany({
+      where: { clubId: currentScope().clubId, id, withdrawnAt: null },
+      data: { withdrawnAt: at, withdrawReason: reason },
     });
+    return count === 1;
   }
 
   async insertResult({ day, ...result }: TestResult): Promise<void> {
@@ -54,11 +55,12 @@ export class PrismaTestsRepository extends TestsRepository {
     }));
   }
 
-  async withdrawResult(id: string, by: string | null, reason: string, at: Date): Promise<void> {
-    await currentTransaction().testResult.updateMany({
-      where: { clubId: currentScope().clubId, id },
+  async withdrawResult(id: string, by: string | null, reason: string, at: Date): Promise<boolean> {
+    const { count } = await currentTransaction().testResult.updateMany({
+      where: { clubId: currentScope().clubId, id, withdrawnAt: null },
       data: { withdrawnAt: at, withdrawnBy: by, withdrawReason: reason },
     });
+    return count === 1;
   }
 }
 

@@ -46,10 +46,11 @@ describe('a test of the squad', () => {
     const made = await define({ ...trial, name: '2 km' });
     expect([made.status, made.body]).toEqual([
       201,
-      expect.objectContaining({ ...trial, name: '2 km', ratingTypicalError: null }),
+      expect.objectContaining({ ...trial, name: '2 km', ratingTypicalError: null, heartRateTypicalError: null }),
     ]);
     const fixed = await define({ ...bout, name: 'Warm-up' });
-    expect(fixed.body).toMatchObject({ setting: 'any', unit: null, typicalError: null, ratingTypicalError: 0.5 });
+    expect(fixed.body).toMatchObject({ setting: 'any', unit: null, typicalError: null });
+    expect(fixed.body).toMatchObject({ ratingTypicalError: 0.5, heartRateTypicalError: 3 });
     expect((await define({ ...trial, name: '2 km' })).status).toBe(409);
     for (const who of ['staff', 'coach', 'athlete'] as const) {
       expect([403, 404]).toContain((await define({ ...trial, name: who }, who)).status);
@@ -58,9 +59,9 @@ describe('a test of the squad', () => {
     await results('POST', '', { definitionId, day: '2026-01-05', value: 400 });
     const gone = await app.api('POST', `/v1/squads/${squadId}/test-definitions/${definitionId}/withdrawal`, {
       token: tokens.manager,
-      body: {},
+      body: { reason: 'replaced by the 6 min test' },
     });
-    expect(gone.body.withdrawnAt).not.toBeNull();
+    expect(gone.body).toMatchObject({ withdrawReason: 'replaced by the 6 min test' });
     const refused = await results('POST', '', { definitionId, day: '2026-01-06', value: 400 });
     expect([refused.status, refused.body.errors[0].field]).toEqual([422, 'definitionId']);
     expect((await results('GET', `?definitionId=${definitionId}`)).body.items).toHaveLength(1);
@@ -89,8 +90,8 @@ describe('a result', () => {
     const { body } = await results('POST', '', { definitionId, day: '2026-01-05', value: 406 });
     expect(body).toMatchObject({ expected: 400, deviation: -3, quality: 'ok' });
     const far = await results('POST', '', { definitionId, day: '2026-01-19', value: 500 });
-    expect(far.body).toMatchObject({ quality: 'question', expected: 400 });
-    expect(far.body.qualityNotes).toEqual(['25 % from the mean of the own last three']);
+    expect(far.body).toMatchObject({ quality: 'suspect', expected: 400 });
+    expect(far.body.qualityNotes).toEqual([expect.stringMatching(/^25 % from .* confirmed: true$/)]);
     const later = await results('POST', '', { definitionId, day: '2026-02-09', value: 402 });
     expect(later.body.expected).toBeCloseTo((400 + 402 + 398 + 400 + 406) / 5, 9);
     const listed = await results('GET', `?definitionId=${definitionId}`, undefined, 'coach');
@@ -100,6 +101,29 @@ describe('a result', () => {
       '2026-01-19',
       '2026-02-09',
     ]);
+    const confirmed = { value: 500, confirmed: true, reason: 'timed by two watches' };
+    const kept = await results('POST', `/${far.body.id as string}/correction`, confirmed);
+    expect(kept.body).toMatchObject({ value: 500, quality: 'ok' });
+    expect(kept.body.qualityNotes).toEqual(['25 % from the mean of the own last three, confirmed']);
+    const after = (await results('GET', `?definitionId=${definitionId}`)).body.items.at(-1);
+    expect(after.expected).toBeCloseTo((400 + 402 + 398 + 400 + 406 + 500) / 6, 9);
+  });
+
+  test('is corrected by one of two who do it at the same moment', async () => {
+    const definitionId = await newTest(trial);
+    const { body: first } = await results('POST', '', { definitionId, day: '2026-01-05', value: 400 });
+    const path = (what: string) => `/${first.id as string}/${what}`;
+    const answers = await Promise.all([
+      results('POST', path('correction'), { value: 401, reason: 'read again' }),
+      results('POST', path('correction'), { value: 402, reason: 'read again' }),
+      results('POST', path('withdrawal'), { reason: 'wrong athlete' }),
+    ]);
+    const won = answers.filter(({ status }) => status < 300);
+    expect(won).toHaveLength(1);
+    for (const { status } of answers) expect([200, 201, 404, 409]).toContain(status);
+    const { items } = (await results('GET', `?definitionId=${definitionId}`)).body;
+    const [{ body }] = won as [(typeof won)[number]];
+    expect(items.map(({ id }: { id: string }) => id)).toEqual(body.withdrawnAt === null ? [body.id] : []);
   });
 
   test('is corrected by another in its place, or taken out, with a reason', async () => {

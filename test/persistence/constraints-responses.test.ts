@@ -39,6 +39,11 @@ const newResult = () => ({
   ...{ quality: 'ok', quality_notes: [], entered_at: now },
 });
 
+const scaleOfNone = { unit: null, direction: null, typical_error: null };
+const boutErrors = {
+  ...{ ...scaleOfNone, kind: 'standard-bout', rating_typical_error: 0.5, heart_rate_typical_error: 3 },
+};
+
 type Case = [constraint: string, table: string, row: object, status: number];
 const answered = (name: string, row: object, status: number): Case => [
   `morning_answer_${name}`,
@@ -91,13 +96,18 @@ const broken: Case[] = [
   circumstance('withdrawn_why', { withdraw_reason: 'x' }, 400),
 
   defined('direction_known', { direction: 'sideways' }, 400),
-  defined('kind_known', { kind: 'quiz', unit: null, direction: null, typical_error: null }, 400),
+  defined('kind_known', { kind: 'quiz', ...scaleOfNone }, 400),
   defined('name_once', { name: 'Known' }, 409),
   defined('scale_by_kind', { typical_error: null }, 400),
   defined('scale_by_kind', { rating_typical_error: 0.5 }, 400),
   defined('scale_by_kind', { kind: 'standard-bout' }, 400),
+  defined('scale_by_kind', { ...scaleOfNone, kind: 'standard-bout', rating_typical_error: 0.5 }, 400),
   defined('squad_fk', { squad_id: stranger }, 404),
   defined('typical_error_range', { typical_error: 0 }, 400),
+  defined('typical_error_range', { ...boutErrors, rating_typical_error: 3.1 }, 400),
+  defined('typical_error_range', { ...boutErrors, heart_rate_typical_error: 0.4 }, 400),
+
+  defined('withdrawn_why', { withdrawn_at: now }, 400),
 
   tested('athlete_fk', { athlete_id: stranger }, 404),
   tested('definition_fk', { definition_id: stranger }, 404),
@@ -105,7 +115,7 @@ const broken: Case[] = [
   tested('heart_rate_recovery_range', { heart_rate_recovery_bpm: 121 }, 400),
   tested('lactate_range', { lactate_mmol_l: 36 }, 400),
   tested('once', { day: '2026-01-01' }, 409),
-  tested('quality_known', { quality: 'suspect' }, 422),
+  tested('quality_known', { quality: 'question' }, 422),
   tested('rating_range', { rating: 11 }, 400),
   tested('supersedes_fk', { supersedes: stranger }, 404),
   tested('value_range', { value: 0 }, 400),

@@ -13,7 +13,7 @@ CREATE TABLE "morning_answer" (
     "mood" INTEGER,
     "resting_heart_rate_bpm" DOUBLE PRECISION,
     "rmssd_ms" DOUBLE PRECISION,
-    "rr_intervals_ms" INTEGER[],
+    "rr_intervals_ms" DOUBLE PRECISION[],
     "rr_removed" INTEGER,
     "quality" TEXT NOT NULL,
     "quality_notes" TEXT[],
@@ -72,9 +72,11 @@ CREATE TABLE "test_definition" (
     "direction" TEXT,
     "typical_error" DOUBLE PRECISION,
     "rating_typical_error" DOUBLE PRECISION,
+    "heart_rate_typical_error" DOUBLE PRECISION,
     "created_by" UUID,
     "created_at" TIMESTAMPTZ(3) NOT NULL,
     "withdrawn_at" TIMESTAMPTZ(3),
+    "withdraw_reason" TEXT,
 
     CONSTRAINT "test_definition_pkey" PRIMARY KEY ("club_id","id")
 );
@@ -141,15 +143,16 @@ ALTER TABLE "circumstance" ADD CONSTRAINT "circumstance_kind_known" CHECK ("kind
 ALTER TABLE "circumstance" ADD CONSTRAINT "circumstance_withdrawn_why" CHECK (("withdrawn_at" IS NULL) = ("withdraw_reason" IS NULL));
 ALTER TABLE "test_definition" ADD CONSTRAINT "test_definition_kind_known" CHECK ("kind" IN ('criterion', 'standard-bout'));
 ALTER TABLE "test_definition" ADD CONSTRAINT "test_definition_direction_known" CHECK ("direction" IN ('higher', 'lower'));
-ALTER TABLE "test_definition" ADD CONSTRAINT "test_definition_scale_by_kind" CHECK (num_nonnulls("unit", "direction", "typical_error") = CASE "kind" WHEN 'criterion' THEN 3 ELSE 0 END AND ("kind" = 'standard-bout') = ("rating_typical_error" IS NOT NULL));
-ALTER TABLE "test_definition" ADD CONSTRAINT "test_definition_typical_error_range" CHECK (("typical_error" IS NULL OR "typical_error" > 0) AND ("rating_typical_error" IS NULL OR "rating_typical_error" BETWEEN 0.1 AND 3));
+ALTER TABLE "test_definition" ADD CONSTRAINT "test_definition_scale_by_kind" CHECK (num_nonnulls("unit", "direction", "typical_error") = CASE "kind" WHEN 'criterion' THEN 3 ELSE 0 END AND num_nonnulls("rating_typical_error", "heart_rate_typical_error") = CASE "kind" WHEN 'standard-bout' THEN 2 ELSE 0 END);
+ALTER TABLE "test_definition" ADD CONSTRAINT "test_definition_typical_error_range" CHECK (("typical_error" IS NULL OR "typical_error" > 0) AND ("rating_typical_error" IS NULL OR "rating_typical_error" BETWEEN 0.1 AND 3) AND ("heart_rate_typical_error" IS NULL OR "heart_rate_typical_error" BETWEEN 0.5 AND 20));
+ALTER TABLE "test_definition" ADD CONSTRAINT "test_definition_withdrawn_why" CHECK (("withdrawn_at" IS NULL) = ("withdraw_reason" IS NULL));
 ALTER TABLE "test_result" ADD CONSTRAINT "test_result_value_range" CHECK ("value" > 0 AND "value" <= 1000000);
 ALTER TABLE "test_result" ADD CONSTRAINT "test_result_work_range" CHECK (("work_w" IS NULL OR "work_w" BETWEEN 20 AND 2000) AND ("work_mps" IS NULL OR "work_mps" BETWEEN 0.2 AND 12));
 ALTER TABLE "test_result" ADD CONSTRAINT "test_result_heart_rate_range" CHECK ("heart_rate_bpm" BETWEEN 60 AND 240);
 ALTER TABLE "test_result" ADD CONSTRAINT "test_result_heart_rate_recovery_range" CHECK ("heart_rate_recovery_bpm" BETWEEN 0 AND 120);
 ALTER TABLE "test_result" ADD CONSTRAINT "test_result_rating_range" CHECK ("rating" BETWEEN 0 AND 10);
 ALTER TABLE "test_result" ADD CONSTRAINT "test_result_lactate_range" CHECK ("lactate_mmol_l" BETWEEN 0.1 AND 35);
-ALTER TABLE "test_result" ADD CONSTRAINT "test_result_quality_known" CHECK ("quality" IN ('ok', 'question'));
+ALTER TABLE "test_result" ADD CONSTRAINT "test_result_quality_known" CHECK ("quality" IN ('ok', 'suspect'));
 ALTER TABLE "test_result" ADD CONSTRAINT "test_result_withdrawn_why" CHECK (("withdrawn_at" IS NULL) = ("withdraw_reason" IS NULL));
 
 -- By hand: what is there once.

@@ -7,6 +7,7 @@ import {
   definitionParamsSchema,
   definitionSchema,
   definitionsParamsSchema,
+  definitionWithdrawalSchema,
   resultCorrectionSchema,
   resultInputSchema,
   resultListSchema,
@@ -57,14 +58,15 @@ export class TestsController {
   }
 
   @Post('squads/:squadId/test-definitions/:definitionId/withdrawal')
-  @ApiOperation({ summary: 'Take a test out of use; its results stay.' })
+  @ApiOperation({ summary: 'Take a test out of use, with the reason; its results stay.' })
   @Access('tests.define', { kind: 'squad', param: 'squadId' })
   @Answer(200, definitionSchema)
   async withdrawDefinition(
     @Param({ schema: definitionParamsSchema })
     { squadId, definitionId }: { squadId: string; definitionId: string },
+    @Body({ schema: definitionWithdrawalSchema }) { reason }: { reason: string },
   ) {
-    return this.definitions.withdraw(squadId, definitionId);
+    return this.definitions.withdraw(squadId, definitionId, reason);
   }
 
   @Post('athletes/:athleteId/test-results')

@@ -3,7 +3,7 @@ import type { FieldError } from '../../platform/errors.ts';
 import type { ResultReadings } from './tests.schema.ts';
 import type { ResultQuality, TestDefinition, TestResult } from './tests.types.ts';
 
-/** Further than this from the mean of the own last three results, a result is asked about: own convention. */
+/** Further than this from the mean of the own last three results, a result has to be confirmed: own convention. */
 const LARGEST_STEP = 0.2;
 const LOOKED_AT = 3;
 
@@ -28,15 +28,17 @@ export function misfits(definition: TestDefinition, given: ResultReadings): Fiel
   return faults;
 }
 
-/** A result far from the own last three is kept and asked about; it stays out of what is expected. */
+/** A result far from the own last three is kept as suspect, unless who enters it confirms it. */
 export function judgeResult(
-  value: number | null,
+  { value, confirmed }: Pick<ResultReadings, 'value' | 'confirmed'>,
   earlier: readonly TestResult[],
 ): { quality: ResultQuality; notes: string[] } {
   const trusted = earlier.filter(({ quality, value: one }) => quality === 'ok' && one !== null).slice(-LOOKED_AT);
-  if (value === null || trusted.length < LOOKED_AT) return { quality: 'ok', notes: [] };
+  if (value === undefined || trusted.length < LOOKED_AT) return { quality: 'ok', notes: [] };
   const usual = mean(trusted.map((one) => one.value!));
   const step = Math.abs(value - usual) / usual;
   if (step <= LARGEST_STEP) return { quality: 'ok', notes: [] };
-  return { quality: 'question', notes: [`${Math.round(100 * step)} % from the mean of the own last three`] };
+  const note = `${Math.round(100 * step)} % from the mean of the own last three`;
+  if (confirmed === true) return { quality: 'ok', notes: [`${note}, confirmed`] };
+  return { quality: 'suspect', notes: [`${note}; if it is right, correct it with confirmed: true`] };
 }

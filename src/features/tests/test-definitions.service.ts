@@ -33,7 +33,8 @@ export class TestDefinitionsService {
           ? { unit: input.unit, direction: input.direction, typicalError: input.typicalError }
           : null,
       ratingTypicalError: input.kind === 'criterion' ? null : input.ratingTypicalError,
-      ...{ createdBy: principal.personId, createdAt: now, withdrawnAt: null },
+      heartRateTypicalError: input.kind === 'criterion' ? null : input.heartRateTypicalError,
+      ...{ createdBy: principal.personId, createdAt: now, withdrawnAt: null, withdrawReason: null },
     };
     await this.tests.insertDefinition(definition);
     await this.audit.record('tests.define', 'squad', squadId, { id: definition.id });
@@ -46,12 +47,12 @@ export class TestDefinitionsService {
   }
 
   /** Takes no further results; those it has stay. */
-  async withdraw(squadId: string, id: string): Promise<DefinitionView> {
+  async withdraw(squadId: string, id: string, reason: string): Promise<DefinitionView> {
     const definition = (await this.tests.definitions(squadId)).find((one) => one.id === id);
     if (definition === undefined) throw new NotFoundError();
     const now = this.clock.now();
-    await this.tests.withdrawDefinition(id, now);
+    if (!(await this.tests.withdrawDefinition(id, reason, now))) throw new NotFoundError();
     await this.audit.record('tests.withdraw', 'squad', squadId, { id });
-    return presentDefinition({ ...definition, withdrawnAt: now });
+    return presentDefinition({ ...definition, withdrawnAt: now, withdrawReason: reason });
   }
 }

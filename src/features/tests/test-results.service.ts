@@ -48,7 +48,7 @@ export class TestResultsService {
     const { old, definition, others } = await this.found(athleteId, resultId);
     const { day } = old;
     const result = this.result(principal, { athleteId, definition, day, supersedes: old.id }, readings, others);
-    await this.tests.withdrawResult(old.id, principal.personId, reason, this.clock.now());
+    await this.takeOut(old.id, principal, reason, this.clock.now());
     await this.tests.insertResult(result);
     await this.audit.record('tests.correct', 'athlete', athleteId, { id: result.id, supersedes: old.id });
     return presentResult(result, definition, others);
@@ -61,32 +61,38 @@ export class TestResultsService {
   ): Promise<ResultView> {
     const { old, definition, others } = await this.found(athleteId, resultId);
     const now = this.clock.now();
-    await this.tests.withdrawResult(old.id, principal.personId, reason, now);
+    await this.takeOut(old.id, principal, reason, now);
     await this.audit.record('tests.withdraw-result', 'athlete', athleteId, { id: old.id });
     return presentResult({ ...old, withdrawnAt: now, withdrawReason: reason }, definition, others);
   }
 
   /** By day, of one test or of all. */
   async list(athleteId: string, definitionId?: string): Promise<ResultView[]> {
-    const results = await this.tests.results([athleteId]);
-    const definitions = await this.tests.definitionsById([...new Set(results.map((one) => one.definitionId))]);
+    const { results, definitions } = await this.of([athleteId]);
     const byId = new Map(definitions.map((definition) => [definition.id, definition]));
     return results
       .filter((one) => definitionId === undefined || one.definitionId === definitionId)
       .map((one) => presentResult(one, byId.get(one.definitionId)!, results));
   }
 
+  /** Results of several athletes by day, and the tests they are of, withdrawn ones too: what flags rest on. */
+  async of(athleteIds: readonly string[]): Promise<{ results: TestResult[]; definitions: TestDefinition[] }> {
+    const results = await this.tests.results(athleteIds);
+    const definitions = await this.tests.definitionsById([...new Set(results.map((one) => one.definitionId))]);
+    return { results, definitions };
+  }
+
   private result(
     principal: Principal,
     place: { athleteId: string; definition: TestDefinition; day: string; supersedes: string | null },
-    { note, value, ...given }: ResultReadings,
+    { note, value, confirmed, ...given }: ResultReadings,
     others: readonly TestResult[],
   ): TestResult {
     const { athleteId, definition, day, supersedes } = place;
     const faults = misfits(definition, { value, ...given });
     if (faults.length > 0) throw new ValidationError(faults, `This does not fit a ${definition.kind} test.`);
     const earlier = others.filter((one) => one.definitionId === definition.id && one.day < day);
-    const { quality, notes } = judgeResult(value ?? null, earlier);
+    const { quality, notes } = judgeResult({ value, confirmed }, earlier);
     const now = this.clock.now();
     return {
       ...{ id: newId(now), definitionId: definition.id, athleteId, day, value: value ?? null },
@@ -96,6 +102,12 @@ export class TestResultsService {
       ...{ enteredBy: principal.personId, enteredAt: now, supersedes },
       ...{ withdrawnAt: null, withdrawnBy: null, withdrawReason: null },
     };
+  }
+
+  /** Of two who take one result out or correct it at the same moment, one does. */
+  private async takeOut(id: string, principal: Principal, reason: string, at: Date): Promise<void> {
+    if (await this.tests.withdrawResult(id, principal.personId, reason, at)) return;
+    throw new ConflictError('The result was corrected or withdrawn at the same moment.');
   }
 
   private async found(athleteId: string, resultId: string) {

@@ -7,9 +7,11 @@ export abstract class TestsRepository {
   abstract definitions(squadId: string): Promise<TestDefinition[]>;
   /** Withdrawn ones too: results name them. */
   abstract definitionsById(ids: readonly string[]): Promise<TestDefinition[]>;
-  abstract withdrawDefinition(id: string, at: Date): Promise<void>;
+  /** False when it was withdrawn before. */
+  abstract withdrawDefinition(id: string, reason: string, at: Date): Promise<boolean>;
   abstract insertResult(result: TestResult): Promise<void>;
   /** Those that were not withdrawn, by athlete and day. */
   abstract results(athleteIds: readonly string[]): Promise<TestResult[]>;
-  abstract withdrawResult(id: string, by: string | null, reason: string, at: Date): Promise<void>;
+  /** False when it was withdrawn before. */
+  abstract withdrawResult(id: string, by: string | null, reason: string, at: Date): Promise<boolean>;
 }

@@ -14,6 +14,8 @@ const aboveZero = z
 
 /** Typical error of a session rating at the same work, where none is given: own convention. */
 const RATING_TYPICAL_ERROR = 0.5;
+/** Typical error of the heart rate at the same work [bpm], where none is given: own convention. */
+const HEART_RATE_TYPICAL_ERROR = 3;
 
 const common = {
   name: lineSchema(100),
@@ -33,11 +35,13 @@ export const definitionInputSchema = z.discriminatedUnion('kind', [
     kind: z.literal('standard-bout'),
     ...common,
     ratingTypicalError: number(0.1, 3, 'CR-10 units').default(RATING_TYPICAL_ERROR),
+    heartRateTypicalError: number(0.5, 20, 'bpm').default(HEART_RATE_TYPICAL_ERROR),
   }),
 ]);
 export type DefinitionInput = z.output<typeof definitionInputSchema>;
 
 export const definitionsParamsSchema = z.strictObject({ squadId: idSchema });
+export const definitionWithdrawalSchema = z.strictObject({ reason: lineSchema(500) });
 export const definitionParamsSchema = z.strictObject({ squadId: idSchema, definitionId: idSchema });
 
 const shown = z.number().nullable();
@@ -53,9 +57,11 @@ export const definitionSchema = z.object({
   direction: z.enum(directions).nullable(),
   typicalError: shown,
   ratingTypicalError: shown,
+  heartRateTypicalError: shown,
   createdBy: z.uuid().nullable(),
   createdAt: z.string(),
   withdrawnAt: z.string().nullable(),
+  withdrawReason: z.string().nullable(),
 });
 export type DefinitionView = z.output<typeof definitionSchema>;
 export const definitionListSchema = z.object({ items: z.array(definitionSchema) });
@@ -69,6 +75,8 @@ const readings = {
   rating: number(0, 10, 'on the CR-10 scale').optional(),
   lactateMmolL: number(0.1, 35, 'mmol/L').optional(),
   note: lineSchema(500).optional(),
+  /** Said of a result that is right although it is far from the own last ones. */
+  confirmed: z.literal(true, { error: 'true, or left out' }).optional(),
 };
 export const resultInputSchema = z.strictObject({ definitionId: idSchema, day: daySchema, ...readings });
 export type ResultInput = z.output<typeof resultInputSchema>;

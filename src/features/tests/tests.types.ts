@@ -4,7 +4,8 @@ export const testKinds = ['criterion', 'standard-bout'] as const;
 export type TestKind = (typeof testKinds)[number];
 export const directions = ['higher', 'lower'] as const;
 export type Direction = (typeof directions)[number];
-export const resultQualities = ['ok', 'question'] as const;
+/** A suspect result is kept and stays out of what is expected. */
+export const resultQualities = ['ok', 'suspect'] as const;
 export type ResultQuality = (typeof resultQualities)[number];
 
 /** What only a criterion test (maximal) has: the unit of its result, which way is better, and its typical error. */
@@ -28,9 +29,12 @@ export interface TestDefinition {
   scale: CriterionScale | null;
   /** Typical error of the rating at the same work [CR-10 units]; null for a criterion test. */
   ratingTypicalError: number | null;
+  /** Typical error of the heart rate at the same work [bpm]; null for a criterion test. */
+  heartRateTypicalError: number | null;
   createdBy: string | null;
   createdAt: Date;
   withdrawnAt: Date | null;
+  withdrawReason: string | null;
 }
 
 /** Of a standard bout: what the fixed work cost. */
