@@ -28,10 +28,11 @@ export class PrismaCircumstancesRepository extends CircumstancesRepository {
     }));
   }
 
-  async withdraw(id: string, reason: string, at: Date): Promise<void> {
-    await currentTransaction().circumstance.updateMany({
-      where: { clubId: currentScope().clubId, id },
+  async withdraw(id: string, reason: string, at: Date): Promise<boolean> {
+    const { count } = await currentTransaction().circumstance.updateMany({
+      where: { clubId: currentScope().clubId, id, withdrawnAt: null },
       data: { withdrawnAt: at, withdrawReason: reason },
     });
+    return count === 1;
   }
 }

@@ -5,5 +5,6 @@ export abstract class CircumstancesRepository {
   abstract insert(circumstance: Circumstance): Promise<void>;
   /** Of the squad and its athletes, those that were not withdrawn, by first day. */
   abstract list(squadId: string): Promise<Circumstance[]>;
-  abstract withdraw(id: string, reason: string, at: Date): Promise<void>;
+  /** False when it was withdrawn before. */
+  abstract withdraw(id: string, reason: string, at: Date): Promise<boolean>;
 }

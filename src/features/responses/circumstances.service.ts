@@ -45,7 +45,7 @@ export class CircumstancesService {
     const circumstance = (await this.circumstances.list(squadId)).find((one) => one.id === id);
     if (circumstance === undefined) throw new NotFoundError();
     const now = this.clock.now();
-    await this.circumstances.withdraw(id, reason, now);
+    if (!(await this.circumstances.withdraw(id, reason, now))) throw new NotFoundError();
     await this.audit.record('circumstances.withdraw', 'squad', squadId, { id });
     return present({ ...circumstance, withdrawnAt: now, withdrawReason: reason });
   }

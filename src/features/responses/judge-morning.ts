@@ -14,7 +14,10 @@ export interface MorningFacts {
   removed: number | null;
 }
 
-/** How far a morning can be trusted; anything but `ok` stays out of baselines. */
+/**
+ * How far a morning can be trusted. A late one is asked about and counts; of a suspect one the RMSSD counts nowhere, the
+ * answers do.
+ */
 export function judgeMorning({ day, today, intervals, removed }: MorningFacts): { quality: Quality; notes: string[] } {
   const notes: string[] = [];
   const late = dayNumber(today) - dayNumber(day);

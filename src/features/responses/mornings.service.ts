@@ -12,8 +12,8 @@ import { AthletesService } from '../athletes/athletes.service.ts';
 import { judgeMorning } from './judge-morning.ts';
 import { MorningsRepository } from './mornings.repository.ts';
 import type { MorningAddition, MorningInput, MorningReceipt, MorningsQuery, MorningView } from './mornings.schema.ts';
-import type { Morning, MorningValues } from './mornings.types.ts';
-import { presentMorning, receiptOf } from './present-morning.ts';
+import type { Morning, MorningReadings, MorningValues } from './mornings.types.ts';
+import { presentMorning, readingsOf, receiptOf } from './present-morning.ts';
 
 const nothing: MorningValues = {
   ...{ sleepHours: null, sleep: null, fatigue: null, stress: null, soreness: null, mood: null },
@@ -111,9 +111,9 @@ export class MorningsService {
     return { items: revisions.map((one) => ({ ...one, changedAt: one.changedAt.toISOString() })) };
   }
 
-  /** Mornings of several athletes, those that were not withdrawn: what flags rest on. */
-  async of(athleteIds: readonly string[], from: string, to: string): Promise<Morning[]> {
-    return this.mornings.list(athleteIds, from, to);
+  /** By athlete and day, of mornings that were not withdrawn: what flags rest on. */
+  async readings(athleteIds: readonly string[], from: string, to: string): Promise<MorningReadings[]> {
+    return (await this.mornings.list(athleteIds, from, to)).map(readingsOf);
   }
 
   private async current(athleteId: string, day: string, basedOn: number): Promise<Morning> {

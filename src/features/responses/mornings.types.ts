@@ -35,6 +35,16 @@ export interface Morning extends MorningValues {
   withdrawReason: string | null;
 }
 
+/** What flags rest on; NaN where it was not measured, or is not to be trusted. */
+export interface MorningReadings {
+  athleteId: string;
+  day: string;
+  /** Sum of the four ratings, 4 to 28. */
+  sum: number;
+  restingHeartRateBpm: number;
+  lnRmssd: number;
+}
+
 /** A version as it was before a change. */
 export interface MorningRevision {
   version: number;

@@ -1,9 +1,10 @@
 import { hooperSum } from '../../core/monitoring/hooper-sum.ts';
+import { lnRmssd } from '../../core/monitoring/rmssd.ts';
 import type { MorningReceipt, MorningView } from './mornings.schema.ts';
-import type { Morning } from './mornings.types.ts';
+import type { Morning, MorningReadings } from './mornings.types.ts';
 
 /** The sum of the four ratings; NaN where one is missing. */
-export function sumOf({ sleep, fatigue, stress, soreness }: Morning): number {
+function sumOf({ sleep, fatigue, stress, soreness }: Morning): number {
   return hooperSum(sleep ?? NaN, fatigue ?? NaN, stress ?? NaN, soreness ?? NaN);
 }
 
@@ -16,6 +17,15 @@ export function presentMorning({ rrIntervalsMs, enteredAt, updatedAt, withdrawnA
     enteredAt: enteredAt.toISOString(),
     updatedAt: updatedAt.toISOString(),
     withdrawnAt: withdrawnAt?.toISOString() ?? null,
+  };
+}
+
+/** What counts of a morning, late or not: the RMSSD of a suspect recording does not. */
+export function readingsOf(morning: Morning): MorningReadings {
+  const { athleteId, day, restingHeartRateBpm, rmssdMs, quality } = morning;
+  return {
+    ...{ athleteId, day, sum: sumOf(morning), restingHeartRateBpm: restingHeartRateBpm ?? NaN },
+    lnRmssd: lnRmssd(quality === 'suspect' ? NaN : (rmssdMs ?? NaN)),
   };
 }
 
