@@ -1,3 +1,4 @@
+import { responseCases } from './bad-input-responses.cases.ts';
 import { changeCases, sessionCases, sheetCases } from './bad-input-sessions.cases.ts';
 import type { BadInput } from './bad-input-sessions.cases.ts';
 
@@ -211,5 +212,6 @@ export const cases: BadInput[] = [
   ...sheetCases,
   ...thresholdCases,
   ...planCases,
+  ...responseCases,
   ...othersCases,
 ];

@@ -32,7 +32,12 @@ const forbidden: Readonly<Record<string, object>> = {
   '/periods': { purpose: 'overload', from: '2026-03-01', to: '2026-12-31' },
   '/memberships': { from: '2026-02-01', to: '2026-02-02' },
   '/closing': {},
-  '/correction': { value: 100_000 },
+  '/thresholds/{valueId}/correction': { value: 100_000 },
+  '/mornings': { day: '2199-01-01' },
+  '/circumstances': { to: '1950-01-01', from: '1950-01-01', athleteId: '0198f3a0-ffff-7000-8000-00000000ffff' },
+  '/test-definitions': { name: '2 km' },
+  '/test-results': { day: '2199-01-01' },
+  '/test-results/{resultId}/correction': { lactateMmolL: 2 },
   '/memberships/{membershipId}/end': { to: '1990-01-01' },
   '/availability/{availabilityId}/end': { to: '1990-01-01' },
 };

@@ -46,7 +46,7 @@ function byType(schema: JsonSchema): fc.Arbitrary<unknown> {
     case 'array':
       return fc.array(fitting(schema.items ?? {}), {
         minLength: schema.minItems ?? 0,
-        maxLength: Math.min(schema.maxItems ?? 5, 5),
+        maxLength: Math.max(schema.minItems ?? 0, Math.min(schema.maxItems ?? 5, 5)),
       });
     case 'object':
       return object(schema);

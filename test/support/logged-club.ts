@@ -18,6 +18,12 @@ export interface LoggedClub {
   valueId: string;
   /** From 2026-02-10 to 2026-02-12. */
   availabilityId: string;
+  /** A criterion test "2 km" of the squad; Nora did it on 2026-02-01. */
+  definitionId: string;
+  /** A standard bout of the squad. */
+  boutId: string;
+  resultId: string;
+  circumstanceId: string;
 }
 
 export async function loggedClub(test: TestApp): Promise<LoggedClub> {
@@ -50,8 +56,24 @@ export async function loggedClub(test: TestApp): Promise<LoggedClub> {
   const { id: availabilityId } = await post(`/v1/athletes/${athleteId}/availability`, entry);
   await post(`/v1/squads/${squadId}/periods`, { purpose: 'taper', from: '2026-04-01', to: '2026-04-10' });
   await post(`/v1/squads/${squadId}/days/2026-02-01/closing`, {});
+  await post(`/v1/athletes/${athleteId}/thresholds`, {
+    values: [{ quantity: 'body-mass', value: 70, method: 'scales', validFrom: '2026-01-20' }],
+  });
+  await post(`/v1/athletes/${athleteId}/mornings`, { day: '2026-02-01', sleep: 3, fatigue: 3, stress: 3 });
+  const camp = { kind: 'heat', from: '2026-02-20', to: '2026-02-24' };
+  const { id: circumstanceId } = await post(`/v1/squads/${squadId}/circumstances`, camp);
+  const ofSquad = { protocol: 'as always', modality: 'rowing', setting: 'ergometer' };
+  const trial = { ...ofSquad, kind: 'criterion', name: '2 km', unit: 's', direction: 'lower', typicalError: 2 };
+  const { id: definitionId } = await post(`/v1/squads/${squadId}/test-definitions`, trial);
+  const bout = { ...ofSquad, kind: 'standard-bout', name: 'Warm-up' };
+  const { id: boutId } = await post(`/v1/squads/${squadId}/test-definitions`, bout);
+  const result = { definitionId, day: '2026-02-01', value: 420 };
+  const { id: resultId } = await post(`/v1/athletes/${athleteId}/test-results`, result);
   const { id: membershipId } = (await test.api('GET', `/v1/athletes/${athleteId}/memberships`, { token })).body
     .items[0];
   const valueId = thresholds.items[0].id;
-  return { token, personId, coach, squadId, athleteId, goneId, sessionId, membershipId, valueId, availabilityId };
+  return {
+    ...{ token, personId, coach, squadId, athleteId, goneId, sessionId, membershipId, valueId, availabilityId },
+    ...{ definitionId, boutId, resultId, circumstanceId },
+  };
 }
