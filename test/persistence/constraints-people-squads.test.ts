@@ -99,7 +99,9 @@ describe('a broken constraint', () => {
   });
 
   test('none of these tables is forgotten', async () => {
-    const named = (await db.constraintsOf(tables)).filter((name) => name !== 'access_token_token_hash_key');
+    const all = await db.constraintsOf(tables);
+    // The club is never the sender's to choose, nor is the hash of a token.
+    const named = all.filter((name) => !name.endsWith('_club_fk') && name !== 'access_token_token_hash_key');
     expect(broken.map(([constraint]) => constraint).toSorted()).toEqual(named);
   });
 });

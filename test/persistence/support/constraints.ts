@@ -8,7 +8,7 @@ import { createTestDatabase } from '../../support/database.ts';
 /** A database written to as its owner, past the schemas of the edge. */
 export interface OwnersDatabase {
   insert: (table: string, row: object) => Promise<void>;
-  /** Names of the constraints and unique indexes of the tables, primary keys and those of the club left out. */
+  /** Names of the constraints and unique indexes of the tables, primary keys left out. */
   constraintsOf: (tables: readonly string[]) => Promise<string[]>;
   close: () => Promise<void>;
 }
@@ -29,7 +29,7 @@ export async function openAsOwner(): Promise<OwnersDatabase> {
     constraintsOf: async (tables) => {
       const { rows } = await owner.query<{ name: string }>(
         `select conname as name from pg_constraint
-         where conrelid = any($1::regclass[]) and contype in ('c', 'f', 'u', 'x') and conname not like '%_club_fk'
+         where conrelid = any($1::regclass[]) and contype in ('c', 'f', 'u', 'x')
          union select indexrelid::regclass::text from pg_index
          where indrelid = any($1::regclass[]) and indisunique and not indisprimary`,
         [tables],
