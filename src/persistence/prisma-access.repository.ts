@@ -2,6 +2,7 @@ import { Injectable } from '@nestjs/common';
 import { AccessRepository } from '../features/access/access.repository.ts';
 import { roles } from '../features/access/access.types.ts';
 import type { Principal, Reach, RoleGrant, TargetKind } from '../features/access/access.types.ts';
+import { reweighScopeSchema } from '../features/sessions/reweigh.schema.ts';
 import { currentTransaction } from './prisma-unit-of-work.ts';
 import { selectPrincipal } from './sql/select-principal.sql.ts';
 import { selectAthleteReach } from './sql/select-athlete-reach.sql.ts';
@@ -33,8 +34,10 @@ export class PrismaAccessRepository extends AccessRepository {
         return session === null ? null : selectAthleteReach(tx, session.athleteId, today);
       }
       case 'reweighing': {
-        const task = await tx.reweighTask.findFirst({ where: { id }, select: { athleteId: true } });
-        return task === null ? null : selectAthleteReach(tx, task.athleteId, today);
+        const task = await tx.reweighTask.findFirst({ where: { id }, select: { scope: true } });
+        if (task === null) return null;
+        const scope = reweighScopeSchema.parse(task.scope);
+        return scope.kind === 'policy' ? squadReach(scope.squadId) : selectAthleteReach(tx, scope.athleteId, today);
       }
     }
   }

@@ -25,10 +25,7 @@ export class PrismaReweighRepository extends ReweighRepository {
     return countReweighCandidates(currentTransaction(), touchedBy(scope));
   }
 
-  async candidates(
-    scope: ReweighScope,
-    options: { enteredUntil: Date; after: string | null; limit: number },
-  ): Promise<WeighedSession[]> {
+  async candidates(scope: ReweighScope, options: { after: string | null; limit: number }): Promise<WeighedSession[]> {
     const tx = currentTransaction();
     const ids = await selectReweighCandidates(tx, touchedBy(scope), options);
     return this.sessions(ids);

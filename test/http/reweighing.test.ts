@@ -174,13 +174,17 @@ describe('a value entered while sessions are being logged', () => {
 describe('quality', () => {
   it('is judged anew with the values it was judged by', async () => {
     const { athleteId } = await club.athlete(squadId, { name: 'Hedda' });
-    const { body } = await enter(athleteId, threshold('max-heart-rate', 'running', 180, '2026-01-01'));
+    const { body } = await enter(athleteId, threshold('max-heart-rate', 'running', 190, '2026-01-01'));
     const run = { startedAt: '2026-02-01T10:00:00Z', durationMin: 30, modality: 'running', meanHeartRateBpm: 182 };
     const id = await log(athleteId, run);
     const read = async () => (await api('GET', `/v1/sessions/${id}`)).body;
-    expect(await read()).toMatchObject({ quality: 'suspect', version: 1 });
+    expect(await read()).toMatchObject({ quality: 'ok', version: 1 });
     const path = `/v1/athletes/${athleteId}/thresholds/${body.items[0].id}/correction`;
-    const answer = await api('POST', path, { value: 190, reason: 'new maximum in a race' });
+    const lowered = await api('POST', path, { value: 180, reason: 'a strap that slipped' });
+    expect(lowered.body.reweighed.sessionIds).toEqual([id]);
+    expect(await read()).toMatchObject({ quality: 'suspect', version: 1 });
+    const again = `/v1/athletes/${athleteId}/thresholds/${lowered.body.item.id}/correction`;
+    const answer = await api('POST', again, { value: 190, reason: 'new maximum in a race' });
     expect(answer.body.reweighed.sessionIds).toEqual([id]);
     expect(await read()).toMatchObject({ quality: 'ok', qualityNotes: [], version: 1 });
   });
@@ -249,6 +253,11 @@ describe('a change that touches more than 500 sessions', () => {
     await test.app.get(ReweighService, { strict: false }).processTask(club.clubId, task.id);
     const done = (await api('GET', `/v1/reweighings/${task.id}`)).body;
     expect(done).toMatchObject({ state: 'done', done: 569 });
+    // The task is the squad's, whoever of it comes first and wherever that athlete is by now.
+    const theirs = (await club.person([{ role: 'manager', squadId: ownSquad }])).token;
+    const elsewhere = (await club.person([{ role: 'manager', squadId: await club.squad('Elsewhere') }])).token;
+    const seen = (token: string) => test.api('GET', `/v1/reweighings/${task.id as string}`, { token });
+    expect([(await seen(theirs)).status, (await seen(elsewhere)).status]).toEqual([200, 404]);
     expect((await changedSince(before)).toSorted()).toEqual(done.sessionIds.toSorted());
     const loads = await rowsOf(
       test.db.ownerUrl,

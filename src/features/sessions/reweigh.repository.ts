@@ -8,7 +8,7 @@ export type ReweighScope =
 
 export interface ReweighTask {
   id: string;
-  /** The athlete by whom access to the task is judged: of a squad's task, one of its athletes. */
+  /** Of a change of thresholds the athlete; of a squad's policy one of its athletes. */
   athleteId: string;
   scope: ReweighScope;
   total: number;
@@ -25,11 +25,8 @@ export interface ReweighTask {
 export abstract class ReweighRepository {
   abstract count(scope: ReweighScope): Promise<number>;
 
-  /** Live sessions of the scope entered up to a moment, by id, from behind the cursor on. */
-  abstract candidates(
-    scope: ReweighScope,
-    options: { enteredUntil: Date; after: string | null; limit: number },
-  ): Promise<WeighedSession[]>;
+  /** Live sessions of the scope by id, from behind the cursor on. */
+  abstract candidates(scope: ReweighScope, options: { after: string | null; limit: number }): Promise<WeighedSession[]>;
 
   /** Rewrites these weights and quality marks; everything else of a session stays. */
   abstract save(

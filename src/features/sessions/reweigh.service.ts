@@ -66,7 +66,7 @@ export class ReweighService {
     const now = this.clock.now();
     if (total > REWEIGH_IN_REQUEST)
       return { sessionIds: [], task: { id: await this.addTask(scope, total, now), total } };
-    const found = await this.tasks.candidates(scope, { enteredUntil: now, after: null, limit: REWEIGH_IN_REQUEST });
+    const found = await this.tasks.candidates(scope, { after: null, limit: REWEIGH_IN_REQUEST });
     return { sessionIds: await this.weighAgain(found), task: null };
   }
 
@@ -85,8 +85,7 @@ export class ReweighService {
     const task = await this.task(taskId);
     if (task.state === 'done') return 'done';
     await this.hold(task.scope);
-    const enteredUntil = task.createdAt;
-    const found = await this.tasks.candidates(task.scope, { enteredUntil, after: task.cursor, limit: BATCH });
+    const found = await this.tasks.candidates(task.scope, { after: task.cursor, limit: BATCH });
     const touched = await this.weighAgain(found);
     const state = found.length < BATCH ? 'done' : 'running';
     const finishedAt = state === 'done' ? this.clock.now() : null;

@@ -38,12 +38,11 @@ export async function countReweighCandidates(tx: Prisma.TransactionClient, touch
 export async function selectReweighCandidates(
   tx: Prisma.TransactionClient,
   touched: Prisma.Sql,
-  { enteredUntil, after, limit }: { enteredUntil: Date; after: string | null; limit: number },
+  { after, limit }: { after: string | null; limit: number },
 ): Promise<string[]> {
   const rows = await tx.$queryRaw<{ id: string }[]>`
     select s.id::text as id from training_session s
     where s.club_id = loadweir_club() and s.withdrawn_at is null
-      and s.created_at <= ${enteredUntil.toISOString()}::timestamptz
       and (${after}::uuid is null or s.id > ${after}::uuid) and ${touched}
     order by s.id limit ${limit}`;
   return rows.map(({ id }) => id);
