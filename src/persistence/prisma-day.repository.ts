@@ -68,7 +68,9 @@ export class PrismaDayRepository extends DaysRepository {
       create: { ...key, ...closing },
       update: closing,
     });
-    await tx.dayUnknown.deleteMany({ where: key });
+    // Marks of these athletes for the day from a squad they were in before have no say any more.
+    const theirs = { clubId, day: key.day, athleteId: { in: [...unknownAthleteIds] } };
+    await tx.dayUnknown.deleteMany({ where: { OR: [key, theirs] } });
     await tx.dayUnknown.createMany({ data: unknownAthleteIds.map((athleteId) => ({ ...key, athleteId })) });
   }
 

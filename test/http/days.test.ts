@@ -219,3 +219,22 @@ describe('load periods', () => {
     expect([answer.status, answer.body.errors[0].field]).toEqual([422, 'athleteId']);
   });
 });
+
+it('a mark "unknown" of a squad the athlete no longer belonged to that day has no say', async () => {
+  const cleo = await club.athlete(squadId, { name: 'Cleo', memberFrom: '2026-02-01' });
+  await close('2026-02-10', { unknownAthleteIds: [cleo.athleteId] });
+  const [stay] = (await call(manager, 'GET', `/v1/athletes/${cleo.athleteId}/memberships`)).body.items;
+  await call(club.adminToken, 'POST', `/v1/athletes/${cleo.athleteId}/memberships/${stay.id}/end`, {
+    to: '2026-02-09',
+  });
+  const next = await club.squad('Next', 'Pacific/Auckland');
+  const joined = { squadId: next, from: '2026-02-10' };
+  await call(club.adminToken, 'POST', `/v1/athletes/${cleo.athleteId}/memberships`, joined);
+  const closer = (await club.person([{ role: 'manager', squadId: next }])).token;
+  const closing = (body: object) => call(closer, 'POST', `${days}${next}/days/2026-02-10/closing`, body);
+  expect((await closing({})).status).toBe(200);
+  const shown = async () => (await call(closer, 'GET', `${days}${next}/days/2026-02-10`)).body.athletes[0].training;
+  expect(await shown()).toBe('rest');
+  expect((await closing({ unknownAthleteIds: [cleo.athleteId] })).status).toBe(200);
+  expect(await shown()).toBe('unknown');
+});

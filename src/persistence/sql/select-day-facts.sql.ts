@@ -50,6 +50,9 @@ export async function selectDayFacts(
       array(
         select u.day::text from day_unknown u
         where u.club_id = a.club_id and u.athlete_id = a.id and u.day between ${from}::date and ${to}::date
+          and exists (
+            select from membership m where m.club_id = u.club_id and m.athlete_id = u.athlete_id
+              and m.squad_id = u.squad_id and m.valid_from <= u.day and (m.valid_to is null or u.day <= m.valid_to))
       ) as "unknownDays",
       t.*
     from athlete a
