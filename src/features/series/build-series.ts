@@ -159,9 +159,12 @@ function ratioByForm(
 ): AcuteChronic & { low?: number[]; high?: number[] } {
   if (form === 'rolling-coupled') return acuteChronicCoupled([...values]);
   if (form === 'rolling-uncoupled') return acuteChronicUncoupled([...values]);
+  // Nothing before the first known load: the recursion starts with it.
+  const first = days.findIndex(({ state }) => state === 'known');
+  const fromFirst = (run: readonly number[]) => run.map((value, index) => (first < 0 || index < first ? NaN : value));
   const filled = fillUnknown(days);
-  const middle = acuteChronicExponential(filled.value);
-  const runs = [filled.value, filled.low, filled.high].map((run) => acuteChronicExponential(run).ratio);
+  const middle = acuteChronicExponential(fromFirst(filled.value));
+  const runs = [filled.value, filled.low, filled.high].map((run) => acuteChronicExponential(fromFirst(run)).ratio);
   return {
     ...middle,
     low: middle.ratio.map((_, i) => Math.min(...runs.map((run) => run[i]!))),

@@ -97,6 +97,20 @@ describe('forms and standard deviations of the policy', () => {
     expect(last(thin, settings).row.ratio.withheld).toBe('17 of 21 days known');
   });
 
+  test.each([1, 4])(
+    'exponential: starts from the first known load, %d unknown days before it change nothing',
+    (gap) => {
+      const settings = { ...defaultSettings, ratio: { form: 'exponential' as const, upper: 1.5 } };
+      const unknown = Array.from({ length: gap }, () => null);
+      const { ratio } = last(log([...unknown, ...constant(34, 100)]), settings).row;
+      expect([ratio.value, ratio.low, ratio.high].map((value) => value?.toFixed(9))).toEqual([
+        '1.000000000',
+        '1.000000000',
+        '1.000000000',
+      ]);
+    },
+  );
+
   test('exponential: bounds open at an unknown day, equal without one', () => {
     const settings = { ...defaultSettings, ratio: { form: 'exponential' as const, upper: 1.5 } };
     const whole = last(log(constant(35, 100)), settings).row.ratio;
