@@ -4,10 +4,10 @@ import { isZone } from './zoned-time.ts';
 /** Shapes every room uses at its edge. The words of `error` are what a client reads as "allowed". */
 export const idSchema = z.uuid({ error: 'a UUID' });
 
-/** A calendar date that exists, between 1950 and 2199. */
+/** A calendar date that exists, between 2000 and 2199: a log begins no earlier, and the first policy with it. */
 export const daySchema = z.iso
   .date({ error: 'a calendar date like 2026-03-02' })
-  .refine((day) => day >= '1950-01-01' && day <= '2199-12-31', { error: 'a date from 1950-01-01 to 2199-12-31' });
+  .refine((day) => day >= '2000-01-01' && day <= '2199-12-31', { error: 'a date from 2000-01-01 to 2199-12-31' });
 
 /** An instant with Z or an offset; without one it would mean another moment in every zone. */
 export const instantSchema = z.iso.datetime({
@@ -31,7 +31,7 @@ export const lineSchema = (max: number) =>
 
 export const isoWeekSchema = z
   .string()
-  .regex(/^\d{4}-W(0[1-9]|[1-4]\d|5[0-3])$/, { error: 'an ISO 8601 week like 2026-W10' });
+  .regex(/^2[01]\d{2}-W(0[1-9]|[1-4]\d|5[0-3])$/, { error: 'an ISO 8601 week like 2026-W10, from 2000 to 2199' });
 
 /** A whole number given as text, as query parameters are. */
 export const queryNumberSchema = (min: number, max: number) =>

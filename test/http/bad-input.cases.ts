@@ -22,6 +22,19 @@ const thresholdCases: BadInput[] = [
   value('no modality', { modality: undefined }, 400, 'modality'),
   value('body mass of rowing', { quantity: 'body-mass', value: 70 }, 400, 'modality'),
   value('30 February', { validFrom: '2026-02-30' }, 400, 'validFrom'),
+  {
+    name: 'threshold: resting heart rate at the maximum',
+    path: values,
+    body: {
+      values: [
+        { quantity: 'resting-heart-rate', value: 110, method: 'test', validFrom: '2026-02-01' },
+        { quantity: 'max-heart-rate', modality: 'skiing', value: 110, method: 'test', validFrom: '2026-02-01' },
+      ],
+    },
+    status: 422,
+    field: 'values[0].value',
+  },
+  value('before the log can begin', { validFrom: '1999-12-31' }, 400, 'validFrom'),
   value('tomorrow', { validFrom: '2026-03-03' }, 422, 'validFrom'),
   value('the same day again', { validFrom: '2026-01-20' }, 409, 'validFrom'),
   value('bound below LT1', { value: 200 }, 422, 'value'),
@@ -185,7 +198,7 @@ const othersCases: BadInput[] = [
   {
     name: 'report: week 54',
     path: '/v1/squads/{squadId}/reports',
-    body: { isoWeek: '2026-W54' },
+    body: { isoWeek: '0000-W01' },
     status: 400,
     field: 'isoWeek',
   },

@@ -64,7 +64,7 @@ describe('one session given to many', () => {
     ]);
     expect(answer.status).toBe(422);
     expect(answer.body.errors).toEqual([
-      expect.objectContaining({ field: 'athletes[1].startedAt', value: '2026-02-03' }),
+      expect.objectContaining({ field: 'athletes[1].athleteId', value: other, allowed: 'an athlete of the squad' }),
       expect.objectContaining({
         field: 'athletes[2].startedAt',
         allowed: 'a training day within the membership, from 2026-02-20 on',

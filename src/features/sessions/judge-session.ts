@@ -6,8 +6,6 @@ import { intervalMinutes } from './weighing/interval-bouts.ts';
 
 /** Minutes a description may be longer than its session: rounding of clock times (own convention). */
 const TOLERANCE_MIN = 1;
-/** A mean heart rate this far above the stored maximum is refused; less far it is suspect (own convention). */
-const REFUSED_ABOVE_MAX_BPM = 3;
 /** Longer than this is questioned (own convention). */
 const LONG_MIN = 480;
 /** Less than this share of the minutes in hand-given domain minutes is questioned (own convention). */
@@ -31,10 +29,9 @@ export function judgeSession(session: SessionEntry, thresholds: ThresholdSet): J
   refused.push(...tooManyMinutes(session));
   for (const { field, value } of meanHeartRates(session)) {
     if (max === undefined || value <= max) continue;
-    if (value > max + REFUSED_ABOVE_MAX_BPM) {
-      const allowed = `at most ${max + REFUSED_ABOVE_MAX_BPM} bpm (stored maximum ${max} and 3)`;
-      refused.push({ field, value, allowed, hint: 'the stored maximum may be old' });
-    } else doubt('suspect', `${field} is above the stored maximum of ${max} bpm`);
+    refused.push({ field, value, allowed: `at most ${max} bpm, the stored maximum`, hint: 'That may be old.' });
+    // A session that was logged before the maximum was lowered stays, and is doubted.
+    doubt('suspect', `${field} is above the stored maximum of ${max} bpm`);
   }
   const { meanHeartRateBpm, peakHeartRateBpm } = session;
   if (meanHeartRateBpm !== null && peakHeartRateBpm !== null && meanHeartRateBpm > peakHeartRateBpm) {

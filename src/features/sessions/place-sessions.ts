@@ -17,7 +17,8 @@ export interface PlacedSession extends NewSession {
 }
 
 /**
- * Gives each session its training day. Refused: a start in the future, an athlete who is not there, a day outside every
+ * Gives each session its training day. For one squad, an athlete who was never in it is answered like one who is not there.
+ * Refused: a start in the future, an athlete who is not there, a day outside every
  * membership, or outside the one squad the sessions are for.
  */
 export function placeSessions(
@@ -32,7 +33,8 @@ export function placeSessions(
       faults.push({ index, kind: 'rule', field, value, allowed });
     const athlete = contexts.get(athleteId);
     const place = athlete === undefined ? null : trainingPlace(athlete, entry.startedAt);
-    if (athlete === undefined || place === null) {
+    const foreign = squadId !== undefined && !athlete?.memberships.some((stay) => stay.squadId === squadId);
+    if (athlete === undefined || place === null || foreign) {
       refuse('athleteId', athleteId, 'an athlete of the squad');
     } else if (entry.startedAt > now) {
       refuse('startedAt', entry.startedAt.toISOString(), `not in the future: up to ${now.toISOString()}`);

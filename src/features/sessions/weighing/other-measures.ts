@@ -28,6 +28,8 @@ export function otherMeasures(
   return { measures: counted.map(({ measure }) => measure), used: counted.flatMap(({ used }) => used) };
 }
 
+const MINUTES_OF_A_DAY = 1440;
+
 function banisterOfMean(session: Weighable, { thresholds, sex }: WeighContext): Counted | null {
   const heartRateBpm = session.meanHeartRateBpm;
   if (heartRateBpm === null) return null;
@@ -58,6 +60,7 @@ function edwards({ content, durationMin }: Weighable, { thresholds }: WeighConte
   if (durationMin - covered > MAX_UNASSIGNED_SHARE * durationMin + 1e-9) {
     return made.without('more than 10 % of the minutes have no heart rate', [max]);
   }
+  if (covered > MINUTES_OF_A_DAY) return made.without('more minutes than a day has', [max]);
   return made.with(heartRateLoadEdwards(edwardsZoneMinutes(bouts, max.value)), [max]);
 }
 
