@@ -13,10 +13,10 @@ function run(name) {
 }
 
 async function runChecks() {
-  let failed = false;
+  let failed = 0;
   for (const name of checks) {
     const { code, output } = await run(name);
-    failed ||= code !== 0;
+    failed += code === 0 ? 0 : 1;
     process.stdout.write(`${name}: ${code === 0 ? 'fine' : `failed\n${output}`}\n`);
   }
   return failed;
@@ -36,11 +36,16 @@ function runTests() {
   return new Promise((resolve) => jest.on('close', (code) => resolve({ code, lastLine })));
 }
 
+/** A failed check counts as one that failed. */
+function counting(line, failedChecks) {
+  return line.replace(/(\d+) failed$/, (_, failed) => `${Number(failed) + failedChecks} failed`);
+}
+
 let checking = true;
 const checked = runChecks().finally(() => (checking = false));
 const { code, lastLine } = await runTests();
 const late = checking;
 const failed = await checked;
-if (failed) process.stdout.write('A check failed: see above.\n');
-if (late || failed) process.stdout.write(`${lastLine}\n`);
-process.exitCode = failed || code !== 0 ? 1 : 0;
+if (failed > 0) process.stdout.write('A check failed: see above.\n');
+if (late || failed > 0) process.stdout.write(`${counting(lastLine, failed)}\n`);
+process.exitCode = failed > 0 || code !== 0 ? 1 : 0;
