@@ -85,6 +85,18 @@ describe('the own relation', () => {
     expect(expectedRating(other, work(70, 0)).rating).toBeNaN();
   });
 
+  test('ratings of 9 and more count as "at least 9": the slope is that of the others', () => {
+    const steep = Array.from({ length: 56 }, (_, day) => {
+      const totalMin = 50 + 10 * (day % 8);
+      return session(day, Math.min(9, (5.5 * totalMin) / 60 + 0.6 * ((day % 3) - 1)), { totalMin });
+    });
+    expect(steep.filter(({ rating }) => rating >= 9).length).toBeGreaterThan(10);
+    const { coefficients } = ratingRelation(steep, FIRST + 70)!;
+    expect(Math.abs(coefficients[1]! - 5.5)).toBeLessThan(0.5);
+    const below = steep.map((one) => ({ ...one, rating: Math.min(8.9, one.rating) }));
+    expect(ratingRelation(below, FIRST + 70)!.coefficients[1]!).toBeLessThan(4.5);
+  });
+
   test('gives no relation if most ratings are at the ceiling, and expects nothing beyond the scale', () => {
     expect(ratingRelation(easy.map((one) => ({ ...one, rating: 9 })), FIRST + 70)).toBeNull(); // prettier-ignore
     const low = ratingRelation(easy.map((one) => ({ ...one, rating: one.totalMin < 55 ? 0 : one.totalMin / 40 })), FIRST + 70)!; // prettier-ignore
