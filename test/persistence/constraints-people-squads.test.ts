@@ -64,6 +64,12 @@ const broken: [constraint: string, table: string, row: () => object, status: num
   ['access_token_expires_later', 'access_token', () => ({ ...newToken(), expires_at: now }), 400],
   ['access_token_person_fk', 'access_token', () => ({ ...newToken(), person_id: randomUUID() }), 404],
   [
+    'squad_name_length',
+    'squad',
+    () => ({ club_id: club, id: randomUUID(), name: '', zone: 'UTC', created_at: now }),
+    400,
+  ],
+  [
     'squad_club_id_name_key',
     'squad',
     () => ({ club_id: club, id: randomUUID(), name: 'Squad', zone: 'UTC', created_at: now }),
@@ -71,6 +77,7 @@ const broken: [constraint: string, table: string, row: () => object, status: num
   ],
   ['load_policy_no_overlap', 'load_policy', () => ({ ...newPolicy(), valid_from: '2026-06-01' }), 409],
   ['load_policy_order', 'load_policy', () => ({ ...newPolicy(), ...backwards }), 422],
+  ['load_policy_created_by_fk', 'load_policy', () => ({ ...newPolicy(), created_by: randomUUID(), ...longAgo }), 404],
   ['load_policy_squad_fk', 'load_policy', () => ({ ...newPolicy(), squad_id: randomUUID(), ...tomorrow }), 404],
   ['athlete_birth_year_range', 'athlete', () => ({ ...newAthlete(), birth_year: 1899 }), 400],
   ['athlete_club_id_person_id_key', 'athlete', () => ({ ...newAthlete(), person_id: person }), 409],

@@ -72,6 +72,13 @@ const tested = (name: string, row: object, status: number): Case => [
 
 const broken: Case[] = [
   answered('athlete_fk', { athlete_id: stranger }, 404),
+  answered('entered_by_fk', { entered_by: stranger }, 404),
+  [
+    'morning_revision_changed_by_fk',
+    'morning_revision',
+    { club_id: club, morning_id: morning, version: 1, snapshot: {}, changed_at: now, changed_by: stranger },
+    404,
+  ],
   ...['sleep', 'fatigue', 'stress', 'soreness', 'mood'].flatMap((item) => [
     answered(`${item}_range`, { [item]: 0 }, 400),
     answered(`${item}_range`, { [item]: 8 }, 400),
@@ -90,6 +97,7 @@ const broken: Case[] = [
     404,
   ],
   circumstance('athlete_fk', { athlete_id: stranger }, 404),
+  circumstance('entered_by_fk', { entered_by: stranger }, 404),
   circumstance('kind_known', { kind: 'fog' }, 400),
   circumstance('order', { valid_to: '2026-03-01' }, 400),
   circumstance('squad_fk', { squad_id: stranger }, 404),
@@ -103,6 +111,7 @@ const broken: Case[] = [
   defined('scale_by_kind', { kind: 'standard-bout' }, 400),
   defined('scale_by_kind', { ...scaleOfNone, kind: 'standard-bout', rating_typical_error: 0.5 }, 400),
   defined('squad_fk', { squad_id: stranger }, 404),
+  defined('created_by_fk', { created_by: stranger }, 404),
   defined('typical_error_range', { typical_error: 0 }, 400),
   defined('typical_error_range', { ...boutErrors, rating_typical_error: 3.1 }, 400),
   defined('typical_error_range', { ...boutErrors, heart_rate_typical_error: 0.4 }, 400),
@@ -110,6 +119,8 @@ const broken: Case[] = [
   defined('withdrawn_why', { withdrawn_at: now }, 400),
 
   tested('athlete_fk', { athlete_id: stranger }, 404),
+  tested('entered_by_fk', { entered_by: stranger }, 404),
+  tested('withdrawn_by_fk', { withdrawn_by: stranger }, 404),
   tested('definition_fk', { definition_id: stranger }, 404),
   tested('heart_rate_range', { heart_rate_bpm: 241 }, 400),
   tested('heart_rate_recovery_range', { heart_rate_recovery_bpm: 121 }, 400),
