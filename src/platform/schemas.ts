@@ -41,6 +41,12 @@ export const queryNumberSchema = (min: number, max: number) =>
     .transform(Number)
     .pipe(z.number().min(min).max(max));
 
+/** Refinement of an input with two days: it does not end before it begins. */
+export function endsAfterStart({ from, to }: { from: string; to: string }, context: z.RefinementCtx): void {
+  if (to >= from) return;
+  context.addIssue({ code: 'custom', path: ['to'], input: to, message: `a date not before ${from}` });
+}
+
 /** From and to of a path or query; both ends included. */
 export const dayRangeShape = { from: daySchema, to: daySchema };
 

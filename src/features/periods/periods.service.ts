@@ -24,7 +24,7 @@ export class PeriodsService {
 
   async add(principal: Principal, squadId: string, input: PeriodInput): Promise<PeriodView> {
     refuseLongOverload(input);
-    if (input.athleteId !== undefined) await this.refuseStranger(squadId, input.athleteId, input);
+    if (input.athleteId !== undefined) await this.squads.requireMember(squadId, input.athleteId, input);
     const now = this.clock.now();
     const period: LoadPeriod = {
       id: newId(now),
@@ -46,14 +46,6 @@ export class PeriodsService {
   /** Of the squad and its athletes, by first day. */
   async list(squadId: string): Promise<PeriodView[]> {
     return (await this.periods.list(squadId)).map(present);
-  }
-
-  private async refuseStranger(squadId: string, athleteId: string, { from, to }: PeriodInput): Promise<void> {
-    const members = await this.squads.members(squadId, from, to);
-    if (members.some((member) => member.athleteId === athleteId)) return;
-    throw new RuleError('The athlete does not belong to the squad then.', [
-      { field: 'athleteId', value: athleteId, allowed: 'an athlete of the squad on these days' },
-    ]);
   }
 }
 

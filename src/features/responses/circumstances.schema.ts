@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { daySchema, idSchema, lineSchema } from '../../platform/schemas.ts';
+import { daySchema, endsAfterStart, idSchema, lineSchema } from '../../platform/schemas.ts';
 import { circumstanceKinds } from './circumstances.types.ts';
 
 export const circumstanceInputSchema = z
@@ -10,10 +10,7 @@ export const circumstanceInputSchema = z
     athleteId: idSchema.optional(),
     note: lineSchema(500).optional(),
   })
-  .superRefine(({ from, to }, context) => {
-    if (to >= from) return;
-    context.addIssue({ code: 'custom', path: ['to'], input: to, message: `a date not before ${from}` });
-  });
+  .superRefine(endsAfterStart);
 export type CircumstanceInput = z.output<typeof circumstanceInputSchema>;
 
 export const circumstancesParamsSchema = z.strictObject({ squadId: idSchema });

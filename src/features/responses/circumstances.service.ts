@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { Clock } from '../../platform/clock.ts';
-import { NotFoundError, RuleError } from '../../platform/errors.ts';
+import { NotFoundError } from '../../platform/errors.ts';
 import { newId } from '../../platform/ids.ts';
 import type { Principal } from '../access/access.types.ts';
 import { AuditService } from '../access/audit.service.ts';
@@ -21,7 +21,7 @@ export class CircumstancesService {
 
   async add(principal: Principal, squadId: string, input: CircumstanceInput): Promise<CircumstanceView> {
     const { kind, from, to, athleteId = null, note = null } = input;
-    if (athleteId !== null) await this.refuseStranger(squadId, athleteId, input);
+    if (athleteId !== null) await this.squads.requireMember(squadId, athleteId, input);
     const now = this.clock.now();
     const circumstance: Circumstance = {
       ...{ id: newId(now), squadId, athleteId, kind, from, to, note },
@@ -48,14 +48,6 @@ export class CircumstancesService {
     if (!(await this.circumstances.withdraw(id, reason, now))) throw new NotFoundError();
     await this.audit.record('circumstances.withdraw', 'squad', squadId, { id });
     return present({ ...circumstance, withdrawnAt: now, withdrawReason: reason });
-  }
-
-  private async refuseStranger(squadId: string, athleteId: string, { from, to }: CircumstanceInput): Promise<void> {
-    const members = await this.squads.members(squadId, from, to);
-    if (members.some((member) => member.athleteId === athleteId)) return;
-    throw new RuleError('The athlete does not belong to the squad then.', [
-      { field: 'athleteId', value: athleteId, allowed: 'an athlete of the squad on these days' },
-    ]);
   }
 }
 

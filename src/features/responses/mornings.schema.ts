@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { daySchema, dayRangeShape, idSchema, lineSchema } from '../../platform/schemas.ts';
+import { dayRangeShape, daySchema, endsAfterStart, idSchema, lineSchema } from '../../platform/schemas.ts';
 import { qualities } from './mornings.types.ts';
 
 const number = (min: number, max: number, unit: string) => {
@@ -49,10 +49,7 @@ export type MorningAddition = z.output<typeof morningAdditionSchema>;
 export const morningWithdrawalSchema = z.strictObject({ reason: lineSchema(500) });
 export const morningsParamsSchema = z.strictObject({ athleteId: idSchema });
 export const morningParamsSchema = z.strictObject({ athleteId: idSchema, day: daySchema });
-export const morningsQuerySchema = z.strictObject(dayRangeShape).superRefine(({ from, to }, context) => {
-  if (to >= from) return;
-  context.addIssue({ code: 'custom', path: ['to'], input: to, message: `a date not before ${from}` });
-});
+export const morningsQuerySchema = z.strictObject(dayRangeShape).superRefine(endsAfterStart);
 export type MorningsQuery = z.output<typeof morningsQuerySchema>;
 
 const shown = z.number().nullable();

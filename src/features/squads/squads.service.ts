@@ -1,6 +1,6 @@
 import { Injectable } from '@nestjs/common';
 import { Clock } from '../../platform/clock.ts';
-import { NotFoundError } from '../../platform/errors.ts';
+import { NotFoundError, RuleError } from '../../platform/errors.ts';
 import { newId } from '../../platform/ids.ts';
 import { AccessService } from '../access/access.service.ts';
 import type { Principal } from '../access/access.types.ts';
@@ -57,6 +57,15 @@ export class SquadsService {
   /** Every stay in the squad that touches these days: an athlete who left and came back appears twice. */
   async members(squadId: string, from: string, to: string): Promise<MemberStay[]> {
     return this.squads.stays(squadId, from, to);
+  }
+
+  /** @throws {RuleError} for an athlete who is not in the squad on any of these days */
+  async requireMember(squadId: string, athleteId: string, { from, to }: { from: string; to: string }): Promise<void> {
+    const members = await this.members(squadId, from, to);
+    if (members.some((member) => member.athleteId === athleteId)) return;
+    throw new RuleError('The athlete does not belong to the squad then.', [
+      { field: 'athleteId', value: athleteId, allowed: 'an athlete of the squad on these days' },
+    ]);
   }
 
   /** People with the role coach in this squad, or in all of them. */
