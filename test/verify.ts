@@ -1,3 +1,4 @@
+import { endWithoutReader } from '../src/platform/end-without-reader.ts';
 import { core } from './verify/core.ts';
 import { readPublished } from './verify/published.ts';
 import type { Row } from './verify/rows.ts';
@@ -34,4 +35,5 @@ function json(rows: readonly Row[]): string {
   return `[\n${rows.map((row) => JSON.stringify(row)).join(',\n')}\n]\n`;
 }
 
+endWithoutReader();
 process.exitCode = main(process.argv.slice(2));

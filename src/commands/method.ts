@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs';
 import { catalogue, methodsTable } from '../core/catalogue.ts';
 import type { Method } from '../core/catalogue.ts';
 import { NumericInputError } from '../core/numeric-input-error.ts';
+import { endWithoutReader } from '../platform/end-without-reader.ts';
 
 const HELP = `Lists the numeric methods and runs one of them.
 
@@ -95,6 +96,7 @@ function json(value: unknown): string {
   return `${JSON.stringify(value, null, 2)}\n`;
 }
 
+endWithoutReader();
 try {
   process.stdout.write(main(process.argv.slice(2)));
 } catch (error) {

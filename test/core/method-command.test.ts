@@ -7,6 +7,7 @@ import { afterAll, expect, test } from '@jest/globals';
 import { catalogue, methodsTable } from '../../src/core/catalogue.ts';
 
 const script = fileURLToPath(new URL('../../src/commands/method.ts', import.meta.url));
+const verifyScript = fileURLToPath(new URL('../verify.ts', import.meta.url));
 const folder = mkdtempSync(join(tmpdir(), 'loadweir-method-'));
 afterAll(() => rmSync(folder, { recursive: true }));
 
@@ -63,6 +64,13 @@ test.each([
   expect([refused.status, refused.stdout]).toEqual([1, '']);
   expect(refused.stderr).toMatch(message);
   expect(refused.stderr.trimEnd().split('\n')).toHaveLength(1);
+});
+
+test('a reader that has enough ends it quietly', () => {
+  for (const command of [`"${script}" --list`, `"${verifyScript}" --json`]) {
+    const piped = spawnSync('sh', ['-c', `"${process.execPath}" ${command} | head -c 20`], { encoding: 'utf8' });
+    expect([piped.status, piped.stdout.length, piped.stderr]).toEqual([0, 20, '']);
+  }
 });
 
 test('explains itself', () => {
